@@ -1,0 +1,5 @@
+export * from './accounts'
+export * from './files'
+export * from './guides'
+export * from './imports'
+export * from './work'

@@ -1,0 +1,16 @@
+import type { IncomingMessage, ServerResponse } from 'node:http'
+import { Router } from 'express'
+import type { Context } from '../context'
+import type { Renderer } from './pages'
+
+/** The addresses of all pages: reading pages first, then the application's shell for its own. */
+export function pageRoutes(
+  _ctx: Context,
+  renderer: Renderer,
+): { routes: Router; serveKept: (req: IncomingMessage, res: ServerResponse) => boolean } {
+  const routes = Router()
+  routes.get(['/sign-in', '/drafts', '/drafts/*rest', '/account', '/account/*rest'], async (req, res) => {
+    res.type('html').send(await renderer.shell(req.originalUrl))
+  })
+  return { routes, serveKept: () => false }
+}

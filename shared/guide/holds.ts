@@ -1,0 +1,31 @@
+import type { Id } from '../lib/ids/id'
+import type { Condition, GuideDocument, Line } from './schema'
+
+/** The option chosen for each line that has one chosen; a line that is not named has the designer's, its first. */
+export type Choices = Readonly<Record<Id, Id>>
+
+/** The option that fills a line under these choices; an unknown choice falls back to the designer's. */
+export function chosenOption(line: Line, choices: Choices): Line['options'][number] {
+  return line.options.find((option) => option.id === choices[line.id]) ?? line.options[0]!
+}
+
+/**
+ * Whether a condition holds. A clause on a line that is not there, or that itself is absent under these choices, does not hold.
+ * A line whose condition leads back to itself counts as absent.
+ */
+export function holds(doc: GuideDocument, choices: Choices, when: Condition | undefined): boolean {
+  return (when ?? []).every((clause) => clauseHolds(doc, choices, clause, new Set()))
+}
+
+function clauseHolds(
+  doc: GuideDocument,
+  choices: Choices,
+  clause: Condition[number],
+  asked: ReadonlySet<Id>,
+): boolean {
+  const line = doc.lines.find((candidate) => candidate.id === clause.line)
+  if (line === undefined || asked.has(line.id)) return false
+  const further = new Set(asked).add(line.id)
+  const present = (line.when ?? []).every((outer) => clauseHolds(doc, choices, outer, further))
+  return present && clause.is.includes(chosenOption(line, choices).id)
+}

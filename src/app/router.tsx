@@ -1,0 +1,16 @@
+import type { QueryClient } from '@tanstack/react-query'
+import { createBrowserRouter } from 'react-router-dom'
+import { Frame } from './frame'
+import { NotFound } from './notFound'
+import { PageTrouble } from './pageTrouble'
+
+/** The application's addresses. Reading pages are documents of their own and are reached by whole loads. */
+export function createRouter(_queryClient: QueryClient) {
+  return createBrowserRouter([
+    {
+      element: <Frame />,
+      errorElement: <PageTrouble />,
+      children: [{ path: '*', element: <NotFound /> }],
+    },
+  ])
+}

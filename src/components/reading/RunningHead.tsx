@@ -1,0 +1,32 @@
+import { useTranslation } from 'react-i18next'
+
+/** The line at the head of every page: mark, places, and who is signed in. */
+export function RunningHead({ current }: { current?: 'library' | 'drafts' }) {
+  const { t } = useTranslation()
+  return (
+    <header className="running-head">
+      <div className="sheet">
+        <a className="brand" href="/guides">
+          <svg viewBox="0 0 16 16" aria-hidden="true">
+            <path d="M10 1h2v6h-2z" fill="var(--oxide)" />
+            <path d="M2 10V8c0-2 2.500-3 6-3s6 1 6 3v2zM1 11h14v4H1z" fill="currentColor" />
+          </svg>
+          {t('name')}
+        </a>
+        <nav>
+          <a href="/guides" aria-current={current === 'library' ? 'page' : undefined}>
+            {t('library')}
+          </a>
+          <a href="/drafts" aria-current={current === 'drafts' ? 'page' : undefined}>
+            {t('drafts')}
+          </a>
+        </nav>
+        <div className="here">
+          <a href="/sign-in" data-account>
+            {t('signIn')}
+          </a>
+        </div>
+      </div>
+    </header>
+  )
+}
