@@ -2,6 +2,7 @@ import { createServer } from 'node:http'
 import { createApp } from './app'
 import { ConfigError, readConfig, type Config } from './config'
 import { createContext } from './context'
+import { featureJobs } from './features'
 import { createPages } from './pages/pages'
 
 /** How long requests and jobs in hand may take after SIGTERM before the process ends all the same. */
@@ -25,6 +26,7 @@ const app = createApp(ctx, pages)
 server.on('request', (req, res) => {
   if (!pages.serveKept(req, res)) app(req, res)
 })
+featureJobs(ctx)
 ctx.jobs.start()
 
 server.once('error', (error: NodeJS.ErrnoException) => {
