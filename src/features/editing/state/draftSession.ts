@@ -44,13 +44,19 @@ export type SaveState =
   | { is: 'changed' }
   | { is: 'keeping' }
   | { is: 'no network' }
-  | { is: 'refused'; why: Refusal; sentence: string }
+  | { is: 'refused'; why: Refusal; error: Error }
 
 /** Files on their way: how many, and how far. */
 export interface Sending {
   id: number
   names: string[]
   share: number
+}
+
+/** A file that was not taken, with the site's sentence, or the error that kept it from arriving. */
+export interface RefusedFile {
+  name: string
+  why: string | Error
 }
 
 export interface DraftView {
@@ -68,7 +74,7 @@ export interface DraftView {
   also: readonly AlsoHere[]
   files: ReadonlyMap<string, FileEntry>
   sending: readonly Sending[]
-  refusedFiles: readonly { name: string; sentence: string }[]
+  refusedFiles: readonly RefusedFile[]
 }
 
 export type SessionView =
@@ -233,7 +239,7 @@ export class DraftSession {
       if (saving.sending === null) await this.save()
       else await new Promise((resolve) => setTimeout(resolve, 100))
       const save = this.rest?.save
-      if (save?.is === 'refused') throw new Error(save.sentence)
+      if (save?.is === 'refused') throw save.error
       if (save?.is === 'no network') throw new NoAnswer('There was no answer from the site.')
     }
     throw new NoAnswer('There was no answer from the site.')
@@ -272,13 +278,17 @@ export class DraftSession {
       )
       this.takeFiles(answer.files)
       this.editSilently((document) => withAssets(document, answer.files))
-      this.patch((rest) => ({ refusedFiles: [...rest.refusedFiles, ...answer.refused] }))
+      this.patch((rest) => ({
+        refusedFiles: [
+          ...rest.refusedFiles,
+          ...answer.refused.map(({ name, sentence }) => ({ name, why: sentence })),
+        ],
+      }))
       return answer.files
     } catch (error) {
       if (!(error instanceof RequestProblem || error instanceof NoAnswer)) throw error
-      const sentence = error instanceof RequestProblem ? error.message : ''
       this.patch((rest) => ({
-        refusedFiles: [...rest.refusedFiles, ...names.map((name) => ({ name, sentence }))],
+        refusedFiles: [...rest.refusedFiles, ...names.map((name) => ({ name, why: error }))],
       }))
       return []
     } finally {
@@ -332,7 +342,7 @@ export class DraftSession {
     if (error instanceof RequestProblem) {
       const why = REFUSALS[error.kind] ?? 'later'
       this.saving = refused(saving)
-      this.patch(() => ({ save: { is: 'refused', why, sentence: error.message } }))
+      this.patch(() => ({ save: { is: 'refused', why, error } }))
       if (TRY_AGAIN.has(why)) this.retryLater()
       return
     }

@@ -1,0 +1,4 @@
+/** The parts list as a ledger. */
+export function PartsLedger() {
+  return <p />
+}
