@@ -9,7 +9,8 @@ export type Sha256 = z.infer<typeof Sha256>
 
 /**
  * Canonical JSON after RFC 8785: the same value always gives the same text, whatever the order of its keys.
- * @throws TypeError for what JSON cannot hold (NaN, infinities, undefined at the root): a programmer's error.
+ * @throws Error for what JSON or UTF-8 cannot hold (NaN, infinities, undefined at the root, half a surrogate pair) and for what goes in
+ * circles: a programmer's error, since the schema keeps all of these out.
  */
 export function canonicalJson(value: unknown): string {
   const text = canonicalize(value)
