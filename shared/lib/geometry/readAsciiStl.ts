@@ -9,13 +9,13 @@ export function readAsciiStl(bytes: Uint8Array, limit: number): StlOutcome {
   return new AsciiReader(bytes, limit).read()
 }
 
-/** What a word asks for; a word that is not among them is refused by its line. */
-const KEYWORDS = new Set(['solid', 'endsolid', 'facet', 'outer', 'vertex', 'endloop', 'endfacet'])
 /** Coordinates of this many digits or fewer are exact as an integer, and the power of ten is exact too: one rounding in all. */
 const EXACT_DIGITS = 15
 const EXACT_POWER = 22
 const POWERS = Array.from({ length: EXACT_POWER + 1 }, (_, power) => Number(`1e${power}`))
 const SHOWN = 40
+/** NaN and infinity as the C libraries of various systems print them, and decimal numbers too large for single precision. */
+const NOT_FINITE = /^[+-]?(nan|inf|1\.#|\d+\.?\d*(e[+-]?\d+)?$)/i
 
 const NEWLINE = 10
 const SPACE = 32
@@ -36,8 +36,7 @@ class AsciiReader {
     let open = false
     let corners = 0
     while (this.nextWord()) {
-      const word = this.word()
-      switch (word) {
+      switch (this.word()) {
         case 'solid':
           this.skipLine()
           open = true
@@ -67,7 +66,7 @@ class AsciiReader {
         case 'endfacet':
           break
         default:
-          return KEYWORDS.has(word) ? this.truncated() : this.unknown()
+          return this.unknown()
       }
     }
     if (open || this.count % 9 !== 0) return this.truncated()
@@ -88,8 +87,7 @@ class AsciiReader {
       if (!this.nextWord()) return this.truncated()
       const value = Math.fround(this.number())
       if (value - value !== 0) {
-        const text = this.text()
-        if (/^[+-]?(nan|inf|infinity)$/i.test(text) || Number.isFinite(Number(text)))
+        if (NOT_FINITE.test(this.text()))
           return { ok: false, why: 'not-finite', facet: Math.floor(this.count / 9) + 1 }
         // The last word of a file that was cut off may be half a number.
         return this.at >= this.bytes.length ? this.truncated() : this.badText()
@@ -132,8 +130,8 @@ class AsciiReader {
   }
 
   /**
-   * The word as a number, NaN when it is none. Digits are gathered by hand because making a string for each of nine numbers a
-   * facet took four fifths of the time; what has too many digits goes through `Number`, so that rounding is always to the nearest.
+   * The word as a number, NaN when it is none. Digits are gathered by hand, because a string for each of nine numbers a facet is
+   * slow; what has too many digits goes through `Number`, so that rounding is always to the nearest.
    */
   private number(): number {
     const { bytes } = this
