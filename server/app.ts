@@ -1,5 +1,4 @@
 import express, { type ErrorRequestHandler, type Express, type Router } from 'express'
-import { toNodeHandler } from 'better-auth/node'
 import { rateLimit } from 'express-rate-limit'
 import helmet from 'helmet'
 import { pinoHttp } from 'pino-http'
@@ -39,12 +38,22 @@ export function createApp(ctx: Context, pages: Pages): Express {
       strictTransportSecurity: ctx.config.appUrl.startsWith('https:'),
     }),
   )
-  const auth = createAuth(ctx.config, ctx.db)
+  const auth = createAuth(ctx)
   app.use(
     '/api',
-    rateLimit({ windowMs: 60_000, limit: 1200, standardHeaders: 'draft-8', legacyHeaders: false }),
+    rateLimit({
+      windowMs: 60_000,
+      limit: 1200,
+      standardHeaders: 'draft-8',
+      legacyHeaders: false,
+      handler: (_req, _res, next) => next(new Problem('too-many')),
+    }),
+    // An answer is for the one who asked, at this moment. A browser that kept it would show a draft as it was.
+    (_req, res, next) => {
+      res.set('Cache-Control', 'no-store')
+      next()
+    },
   )
-  app.all('/api/auth/*rest', toNodeHandler(auth))
   app.use(whoAsks(ctx, auth))
   app.use('/api', express.json({ limit: '20mb' }), featureRoutes(ctx, auth) satisfies Router)
   app.use('/api', () => {
@@ -70,13 +79,18 @@ function problems(ctx: Context): ErrorRequestHandler {
 
 function asProblem(error: unknown): Problem {
   if (error instanceof Problem) return error
-  if (isNamed(error, 'ENOSPC') || isNamed(error, 'SQLITE_FULL'))
+  if (hasField(error, 'code', 'ENOSPC') || hasField(error, 'code', 'SQLITE_FULL')) {
     return new Problem('no-space', {}, [], { cause: error })
-  const type = (error as { type?: unknown }).type
-  if (type === 'entity.too.large') return new Problem('too-large', { limit: '20 MB' }, [], { cause: error })
-  if (type === 'entity.parse.failed') return new Problem('bad-request', {}, [], { cause: error })
+  }
+  if (hasField(error, 'type', 'entity.too.large')) {
+    return new Problem('too-large', { limit: '20 MB' }, [], { cause: error })
+  }
+  // What Express and its parsers refuse: broken JSON, an address with a broken escape, an unknown encoding.
+  if (hasField(error, 'status', 400) || hasField(error, 'status', 415)) {
+    return new Problem('bad-request', {}, [], { cause: error })
+  }
   return new Problem('internal', {}, [], { cause: error })
 }
 
-const isNamed = (error: unknown, code: string): boolean =>
-  error instanceof Error && (error as NodeJS.ErrnoException).code === code
+const hasField = (error: unknown, field: string, value: unknown): boolean =>
+  error instanceof Error && (error as Error & Record<string, unknown>)[field] === value

@@ -2,10 +2,18 @@ import { Router } from 'express'
 import type { Auth } from '../auth/auth'
 import type { Context } from '../context'
 import { handleMailJobs } from '../mail/handleMailJobs'
+import { accountRoutes } from './accounts/routes'
+import { draftRoutes } from './drafts/routes'
+import { guideRoutes } from './guides/routes'
+import { mailRoutes } from './mail/routes'
 
 /** The routes of every feature under /api, in one readable list. */
-export function featureRoutes(_ctx: Context, _auth: Auth): Router {
+export function featureRoutes(ctx: Context, auth: Auth): Router {
   const router = Router()
+  router.use(accountRoutes(ctx, auth))
+  router.use(mailRoutes(ctx))
+  router.use(guideRoutes(ctx))
+  router.use(draftRoutes(ctx))
   return router
 }
 

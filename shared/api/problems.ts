@@ -10,6 +10,18 @@ export const PROBLEMS = {
     title: 'Something in the form is not right. Mend the fields that are named.',
   },
   'not-signed-in': { status: 401, title: 'Sign in first.' },
+  'wrong-password': {
+    status: 401,
+    title: 'The address and the password do not belong together. Try again, or ask for a link by mail.',
+  },
+  'not-confirmed': {
+    status: 403,
+    title: 'This address has not been confirmed yet. Open the mail that we sent, or ask for it again.',
+  },
+  'link-spent': {
+    status: 410,
+    title: 'This link has been used or is too old. Ask for a new one.',
+  },
   'not-allowed': {
     status: 403,
     title: 'You may not do this. Ask the owner of the guide for the role that you need.',
@@ -25,11 +37,39 @@ export const PROBLEMS = {
     status: 409,
     title: 'Nothing has changed since revision {label}, so there is nothing to publish.',
   },
+  'is-published': {
+    status: 409,
+    title: 'This guide has been published, and what was published stays. It cannot be removed.',
+  },
+  'last-owner': {
+    status: 409,
+    title: 'A guide needs an owner, and this is the last one. Make somebody else an owner first.',
+  },
+  'last-curator': {
+    status: 409,
+    title: 'The site needs a curator, and you are the last one. Make somebody else a curator first.',
+  },
+  'own-role': { status: 409, title: 'Nobody changes their own role on the site. Ask another curator.' },
+  'already-member': { status: 409, title: '{email} has this role on the guide already.' },
+  'not-refused': {
+    status: 409,
+    title: 'Only a mail that was refused can be sent again; this one is on its way or has gone.',
+  },
+  'other-address': {
+    status: 409,
+    title:
+      'The invitation went to {invited}, and you are signed in as {yours}. Say whether you want to accept it all the same.',
+  },
+  'invitation-over': {
+    status: 410,
+    title: 'This invitation has been used, withdrawn or is older than 14 days. Ask for a new one.',
+  },
   'etag-missing': { status: 428, title: 'Say which version you changed, in the If-Match header.' },
   'too-large': { status: 413, title: 'This file is larger than {limit}. Make it smaller, or split it.' },
   'wrong-type': { status: 415, title: 'This is not a file that can be used here: {found}. Bring {wanted}.' },
   'bad-file': { status: 422, title: '{sentence}' },
   'too-many': { status: 429, title: 'Too many requests. Wait a minute and try again.' },
+  'too-many-tries': { status: 429, title: 'Too many tries. Wait {minutes} minutes and try again.' },
   'no-space': { status: 507, title: 'The disk of the site is full. Nothing was saved; tell the curator.' },
   internal: {
     status: 500,
