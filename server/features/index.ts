@@ -6,12 +6,14 @@ import { accountRoutes } from './accounts/routes'
 import { draftRoutes } from './drafts/routes'
 import { guideRoutes } from './guides/routes'
 import { mailRoutes } from './mail/routes'
+import { peopleRoutes } from './people/routes'
 
 /** The routes of every feature under /api, in one readable list. */
 export function featureRoutes(ctx: Context, auth: Auth): Router {
   const router = Router()
   router.use(accountRoutes(ctx, auth))
   router.use(mailRoutes(ctx))
+  router.use(peopleRoutes(ctx))
   router.use(guideRoutes(ctx))
   router.use(draftRoutes(ctx))
   return router

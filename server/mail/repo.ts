@@ -42,7 +42,7 @@ export function waitAgain(tx: Tx, id: string): boolean {
 /** Newest first; `before` is the last row of the page before. */
 export function listMails(
   tx: Tx,
-  options: { state?: MailState; before?: { createdAt: Date; id: string }; limit: number },
+  options: { state?: MailState; before?: { at: Date; id: string }; limit: number },
 ): MailRow[] {
   const { state, before, limit } = options
   return tx
@@ -53,10 +53,7 @@ export function listMails(
         state === undefined ? undefined : eq(mails.state, state),
         before === undefined
           ? undefined
-          : or(
-              lt(mails.createdAt, before.createdAt),
-              and(eq(mails.createdAt, before.createdAt), lt(mails.id, before.id)),
-            ),
+          : or(lt(mails.createdAt, before.at), and(eq(mails.createdAt, before.at), lt(mails.id, before.id))),
       ),
     )
     .orderBy(desc(mails.createdAt), desc(mails.id))

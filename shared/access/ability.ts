@@ -13,10 +13,10 @@ export interface Person {
 }
 
 /**
- * What can be asked. On a guide: `see` its draft, `edit` it, `publish` it, `manage` its people, `review` it, `translate` it.
+ * What can be asked. On a guide: `see` its draft, `edit` it, `publish` it, `manage` its people, `review` it, `translate` it, `leave` it.
  * On the site: `start` a guide, `bring` files in, `curate` the library (mail, accounts). On an account: `keep` it (one's own).
  */
-export type GuideAction = 'see' | 'edit' | 'publish' | 'manage' | 'review' | 'translate'
+export type GuideAction = 'see' | 'edit' | 'publish' | 'manage' | 'review' | 'translate' | 'leave'
 export type SiteAction = 'start' | 'bring' | 'curate'
 type Subjects =
   | 'Guide'
@@ -27,10 +27,10 @@ type Subjects =
 export type Ability = MongoAbility<[GuideAction | SiteAction | 'keep', Subjects]>
 
 const MAY: Record<GuideRole, readonly GuideAction[]> = {
-  owner: ['see', 'edit', 'publish', 'manage'],
-  author: ['see', 'edit'],
-  translator: ['see', 'translate'],
-  reviewer: ['see', 'review'],
+  owner: ['see', 'edit', 'publish', 'manage', 'leave'],
+  author: ['see', 'edit', 'leave'],
+  translator: ['see', 'translate', 'leave'],
+  reviewer: ['see', 'review', 'leave'],
 }
 
 /** Everything that a person may do, in one place. Null is a reader without an account: published guides need no permission. */
