@@ -48,20 +48,26 @@ function fillFacet(buffer: DepthBuffer, points: Float64Array, part: number, a: n
   const toY = Math.min(buffer.height - 1, Math.floor(Math.max(ay, by, cy) - 0.5))
   const fromX = Math.max(0, Math.ceil(Math.min(ax, bx, cx) - 0.5))
   const toX = Math.min(buffer.width - 1, Math.floor(Math.max(ax, bx, cx) - 0.5))
+  // The three weights change by a constant from one sample to the next; with the sign of the area they are positive inside.
   const sign = area > 0 ? 1 : -1
+  const acrossB = (cy - ay) * sign
+  const acrossC = -(by - ay) * sign
+  const { depth, part: parts, width } = buffer
   for (let y = fromY; y <= toY; y++) {
+    const px = fromX + 0.5 - ax
     const py = y + 0.5 - ay
-    for (let x = fromX; x <= toX; x++) {
-      const px = x + 0.5 - ax
-      const weightB = px * (cy - ay) - py * (cx - ax)
-      const weightC = (bx - ax) * py - (by - ay) * px
-      if (weightB * sign < 0 || weightC * sign < 0 || (area - weightB - weightC) * sign < 0) continue
-      const z = az + slopeB * weightB + slopeC * weightC
-      const index = y * buffer.width + x
-      if (z < buffer.depth[index]!) {
-        buffer.depth[index] = z
-        buffer.part[index] = part
+    let weightB = (px * (cy - ay) - py * (cx - ax)) * sign
+    let weightC = ((bx - ax) * py - (by - ay) * px) * sign
+    for (let index = y * width + fromX; index <= y * width + toX; index++) {
+      if (weightB >= 0 && weightC >= 0 && weightB + weightC <= area * sign) {
+        const z = az + (slopeB * weightB + slopeC * weightC) * sign
+        if (z < depth[index]!) {
+          depth[index] = z
+          parts[index] = part
+        }
       }
+      weightB += acrossB
+      weightC += acrossC
     }
   }
 }

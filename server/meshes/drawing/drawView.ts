@@ -34,7 +34,8 @@ export function drawView(parts: readonly PlacedMesh[], options: DrawOptions = {}
   for (const [from, to] of options.axes ?? [])
     follow([...projection.place(from), ...projection.place(to)], 0, 3, buffer, strokes.chain)
   const anchors: Record<string, { x: number; y: number }> = {}
-  const inside = depthInside(buffer)
+  const asked = Object.keys(options.anchors ?? {}).length > 0
+  const inside = asked ? depthInside(buffer) : new Float32Array()
   for (const [name, anchor] of Object.entries(options.anchors ?? {})) {
     const point = isPoint(anchor)
       ? onSheet(projection.place(anchor))

@@ -5,37 +5,39 @@ import { NO_PART, SAMPLES, type DepthBuffer } from './depthBuffer'
  * Two passes with steps of 1 and √2 (Borgefors 1986): a few per cent off, which is enough to stand away from an edge.
  */
 export function depthInside({ width, height, part }: DepthBuffer): Float32Array {
-  const far = new Float32Array(width * height)
-  const diagonal = Math.SQRT2
-  const near = (index: number, neighbour: number, step: number): void => {
-    const value = part[neighbour] === part[index] ? far[neighbour]! + step : step / 2
-    if (value < far[index]!) far[index] = value
-  }
-  far.fill(Infinity)
-  for (let y = 0; y < height; y++) {
-    for (let x = 0; x < width; x++) {
-      const index = y * width + x
-      if (x === 0 || y === 0) far[index] = 0.5
-      if (x > 0) near(index, index - 1, 1)
-      if (y === 0) continue
-      near(index, index - width, 1)
-      if (x > 0) near(index, index - width - 1, diagonal)
-      if (x < width - 1) near(index, index - width + 1, diagonal)
-    }
-  }
-  for (let y = height - 1; y >= 0; y--) {
-    for (let x = width - 1; x >= 0; x--) {
-      const index = y * width + x
-      if (x === width - 1 || y === height - 1) far[index] = Math.min(far[index]!, 0.5)
-      if (x < width - 1) near(index, index + 1, 1)
-      if (y === height - 1) continue
-      near(index, index + width, 1)
-      if (x < width - 1) near(index, index + width + 1, diagonal)
-      if (x > 0) near(index, index + width - 1, diagonal)
-    }
-  }
+  const far = new Float32Array(width * height).fill(Infinity)
+  const forth = [-1, -width, -width - 1, -width + 1]
+  const back = [1, width, width + 1, width - 1]
+  sweep(far, part, width, height, forth)
+  sweep(far, part, width, height, back)
   for (let index = 0; index < far.length; index++) far[index]! /= SAMPLES
   return far
+}
+
+/** One pass: each sample is as far from an edge as its nearest neighbour that came before it, and a step more. */
+function sweep(
+  far: Float32Array,
+  part: Uint16Array,
+  width: number,
+  height: number,
+  neighbours: readonly number[],
+): void {
+  const onward = neighbours[0]! < 0
+  for (let count = 0; count < far.length; count++) {
+    const index = onward ? count : far.length - 1 - count
+    const x = index % width
+    let least = far[index]!
+    if (x === 0 || x === width - 1 || index < width || index >= width * (height - 1)) least = 0.5
+    else {
+      for (let turn = 0; turn < 4; turn++) {
+        const neighbour = index + neighbours[turn]!
+        const step = turn < 2 ? 1 : Math.SQRT2
+        const reach = part[neighbour] === part[index] ? far[neighbour]! + step : step / 2
+        if (reach < least) least = reach
+      }
+    }
+    far[index] = least
+  }
 }
 
 /**
@@ -43,30 +45,32 @@ export function depthInside({ width, height, part }: DepthBuffer): Float32Array 
  * hidden. Of the points that lie deep enough it takes the one nearest to the middle of what is seen.
  */
 export function pointOn(
-  buffer: DepthBuffer,
+  { width, part }: DepthBuffer,
   inside: Float32Array,
-  parts: ReadonlySet<number>,
+  numbers: ReadonlySet<number>,
 ): { x: number; y: number } | undefined {
+  const wanted = new Uint8Array(NO_PART + 1)
+  for (const number of numbers) wanted[number] = 1
+  const seen: number[] = []
   let deepest = 0
   let sumX = 0
   let sumY = 0
-  let count = 0
-  for (let index = 0; index < buffer.part.length; index++) {
-    if (!parts.has(buffer.part[index]!)) continue
-    count++
-    sumX += index % buffer.width
-    sumY += Math.floor(index / buffer.width)
-    deepest = Math.max(deepest, inside[index]!)
+  for (let index = 0; index < part.length; index++) {
+    if (wanted[part[index]!] === 0) continue
+    seen.push(index)
+    sumX += index % width
+    sumY += Math.floor(index / width)
+    if (inside[index]! > deepest) deepest = inside[index]!
   }
-  if (count === 0) return undefined
-  const enough = Math.min(deepest * 0.7, 9)
+  const middle = { x: sumX / seen.length, y: sumY / seen.length }
+  const enough = Math.min(deepest * 0.7, DEEP)
   let best: { x: number; y: number } | undefined
   let nearest = Infinity
-  for (let index = 0; index < buffer.part.length; index++) {
-    if (!parts.has(buffer.part[index]!) || inside[index]! < enough) continue
-    const x = index % buffer.width
-    const y = Math.floor(index / buffer.width)
-    const away = Math.hypot(x - sumX / count, y - sumY / count)
+  for (const index of seen) {
+    if (inside[index]! < enough) continue
+    const x = index % width
+    const y = Math.floor(index / width)
+    const away = (x - middle.x) ** 2 + (y - middle.y) ** 2
     if (away < nearest) {
       nearest = away
       best = { x: (x + 0.5) / SAMPLES, y: (y + 0.5) / SAMPLES }
@@ -75,6 +79,8 @@ export function pointOn(
   return best
 }
 
+/** So many pixels from the edge, a dot plainly stands on its part. */
+const DEEP = 9
 /** Half the room that a balloon needs, in pixels of the sheet: 27 px on a desk, where the sheet is shown at its own size. */
 const BALLOON = 17
 /** Balloons stand at least so far from each other. */
