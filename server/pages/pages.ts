@@ -25,7 +25,7 @@ export interface Renderer {
 
 export async function createPages(ctx: Context, server: Server): Promise<Pages> {
   const router = Router()
-  const vite = ctx.config.production ? undefined : await startVite(server)
+  const vite = ctx.config.production ? undefined : await startVite(server, ctx.config.port)
   const renderer = vite === undefined ? builtRenderer(router) : viteRenderer(vite)
   const { routes, serveKept } = pageRoutes(ctx, renderer)
   router.use(routes)
@@ -33,10 +33,12 @@ export async function createPages(ctx: Context, server: Server): Promise<Pages> 
   return { router, serveKept, close: async () => vite?.close() }
 }
 
-async function startVite(server: Server): Promise<ViteDevServer> {
+async function startVite(server: Server, port: number): Promise<ViteDevServer> {
   const { createServer } = await import('vite')
   return createServer({
     root: rootDir(),
+    // Two servers in development at once would spoil each other's prepared packages.
+    cacheDir: `node_modules/.vite/${port}`,
     server: { middlewareMode: true, hmr: { server } },
     appType: 'custom',
   })

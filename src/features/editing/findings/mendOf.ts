@@ -15,7 +15,11 @@ export function mendOf(finding: Finding, document: GuideDocument): Mend | undefi
   const { node, page } = finding.place
   if (page !== 'parts' || node === null || !document.lines.some((line) => line.id === node)) return undefined
   const found = reconcile(document).lines.find((line) => line.line === node)
-  if (found?.used == null || !['more used', 'more listed', 'no quantity'].includes(found.balance))
+  if (
+    found === undefined ||
+    found.used === null ||
+    !['more used', 'more listed', 'no quantity'].includes(found.balance)
+  )
     return undefined
   return {
     change: (doc) => takeFromSteps(doc, node),

@@ -59,7 +59,7 @@ export function DraftFrame({ guideId, ...rest }: DraftFrameProps) {
       </div>
     )
   }
-  if (session === null || view.is === 'loading') {
+  if (view.is === 'loading') {
     return (
       <div className="sheet py-12">
         <Busy>{t('frame.loading')}</Busy>

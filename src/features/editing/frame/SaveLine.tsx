@@ -18,7 +18,9 @@ export function SaveLine() {
   })
   return (
     <p className="note save-line">
-      {view.guide.latest !== null && <span>{t('save.after', { label: view.guide.latest.label })}</span>}
+      {view.guide.latest !== null && (
+        <>{t('save.after', { label: view.guide.latest.label }) + t('save.then')}</>
+      )}
       <span className={trouble ? 'oxide' : undefined} data-save={view.save.is}>
         {words}
         {view.save.is === 'refused' && view.save.why === 'sign in' && (
@@ -30,7 +32,7 @@ export function SaveLine() {
           </>
         )}
       </span>
-      {others.length > 0 && <span>{new Intl.ListFormat(i18n.language).format(others)}</span>}
+      {others.length > 0 && <>{t('save.then') + new Intl.ListFormat(i18n.language).format(others)}</>}
       <span className="visually-hidden" role="status">
         {spoken}
       </span>

@@ -53,7 +53,7 @@ export function Outline({ currentStep }: { currentStep: Id | null }) {
   }
 
   return (
-    <nav className="outline" aria-label={t('outline.name')} data-open={open || undefined}>
+    <nav className="draft-outline" aria-label={t('outline.name')} data-open={open || undefined}>
       <p className="label outline-name">{t('outline.name')}</p>
       <Button
         className="outline-toggle"

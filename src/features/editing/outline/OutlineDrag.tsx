@@ -4,6 +4,7 @@ import {
   DndContext,
   DragOverlay,
   PointerSensor,
+  pointerWithin,
   useDraggable,
   useDroppable,
   useSensor,
@@ -52,6 +53,7 @@ export function OutlineDrag({ onDrop, children }: { onDrop: (drop: Drop) => void
   return (
     <DndContext
       sensors={sensors}
+      collisionDetection={pointerWithin}
       onDragStart={({ active }) => setDragged(rowOf(active))}
       onDragMove={(event) => setLanding(landingOf(event))}
       onDragCancel={stop}
@@ -82,18 +84,18 @@ export function useRowDrag(row: Row): {
   landing: string | undefined
 } {
   const { t } = useTranslation('editing')
-  const drag = useDraggable({ id: row.id, data: row })
+  const { setNodeRef: setGrip, listeners, isDragging } = useDraggable({ id: row.id, data: row })
   const { setNodeRef } = useDroppable({ id: row.id, data: row })
   const landing = useContext(Landing)
   const grip = (
     // Not a tab stop: by keyboard the row itself moves.
     <span
       className="grip"
-      ref={drag.setNodeRef}
-      {...drag.listeners}
+      ref={setGrip}
+      {...listeners}
       title={t('outline.drag')}
       aria-hidden
-      data-dragging={drag.isDragging || undefined}
+      data-dragging={isDragging || undefined}
     >
       <GripVertical size={16} />
     </span>

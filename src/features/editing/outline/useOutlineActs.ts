@@ -8,7 +8,7 @@ import type { Id } from '../../../../shared/lib/ids/id'
 import { useDraft } from '../draftStore'
 import { guideAddress, stepAddress } from '../frame/addresses'
 import { useOpenDraft } from '../frame/sessionContext'
-import { focusPlace } from '../frame/useGoToPlace'
+import { focusPlace, type GoingTo } from '../frame/useGoToPlace'
 import { copyStep } from './copyStep'
 import { drop, nudgeSection, nudgeStep, placeOf, type Drop } from './moveInOutline'
 import { removeSection, removeStep, stepsOf } from './removeFromOutline'
@@ -30,7 +30,7 @@ export function useOutlineActs(currentStep: Id | null): OutlineActs {
   const { document, edit, newId, announce, numbers } = useDraft()
   const { guideId, sayDone } = useOpenDraft()
   const navigate = useNavigate()
-  /** The focus stays with the row that moved. */
+  /** The focus stays in the outline. */
   const stay = (id: Id): void => void setTimeout(() => focusPlace(`outline-${id}`, null))
 
   const moved = (kind: 'step' | 'section', id: Id, after: GuideDocument): void => {
@@ -56,10 +56,15 @@ export function useOutlineActs(currentStep: Id | null): OutlineActs {
     const at = before.findIndex((step) => gone.includes(step.id))
     const rest = stepsOf(after)
     const next = rest[Math.min(Math.max(at, 0), rest.length - 1)]
-    if (currentStep !== null && gone.includes(currentStep)) {
-      void navigate(next === undefined ? guideAddress(guideId) : stepAddress(guideId, next.id))
+    if (currentStep === null || !gone.includes(currentStep)) {
+      if (next !== undefined) stay(next.id)
+      return
     }
-    if (next !== undefined) stay(next.id)
+    if (next === undefined) void navigate(guideAddress(guideId))
+    else {
+      const state: GoingTo = { focus: `outline-${next.id}` }
+      void navigate(stepAddress(guideId, next.id), { state })
+    }
   }
 
   return {

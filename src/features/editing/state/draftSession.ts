@@ -117,6 +117,7 @@ export class DraftSession {
   private retries = 0
   private leftover: { changes: KeptChanges; drop: () => Promise<void> }[] = []
   private alive = false
+  private openings = 0
   private nextSending = 0
 
   constructor(private readonly outside: Outside) {}
@@ -130,9 +131,11 @@ export class DraftSession {
   /** Opens the draft, taking up what an earlier page kept. */
   async open(): Promise<void> {
     this.alive = true
+    const opening = (this.openings += 1)
+    this.outside.kept.hold()
     try {
       const [found, left] = await Promise.all([this.outside.fetchDraft(), this.leftBehind()])
-      if (!this.alive) return
+      if (!this.alive || opening !== this.openings) return
       const [first, ...others] = left
       this.leftover = others
       this.saving = first === undefined ? startSaving(found) : takeUp(first.changes, found)
@@ -171,7 +174,7 @@ export class DraftSession {
     for (const timer of Object.values(this.timers)) clearTimeout(timer)
     this.timers = {}
     // The last save may still be under way; it ends by itself, and what is kept is forgotten only then.
-    if (this.saving?.sending === null) this.outside.kept.close()
+    if ((this.saving?.sending ?? null) === null) this.outside.kept.letGo()
   }
 
   edit(change: Change, together?: string): void {
@@ -333,7 +336,7 @@ export class DraftSession {
     } catch (error) {
       this.saveFailed(error)
     }
-    if (!this.alive) this.outside.kept.close()
+    if (!this.alive) this.outside.kept.letGo()
   }
 
   private saveFailed(error: unknown): void {

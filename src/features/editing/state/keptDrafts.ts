@@ -18,7 +18,9 @@ export interface KeptDrafts {
   forget: () => Promise<void>
   /** What pages that are no longer open have left, the oldest first; it stays kept until `drop`. */
   left: () => Promise<{ changes: KeptChanges; drop: () => Promise<void> }[]>
-  close: () => void
+  /** Says that the page is open, so that no other one takes its changes up. */
+  hold: () => void
+  letGo: () => void
 }
 
 /**
@@ -28,7 +30,7 @@ export interface KeptDrafts {
 export function keptDrafts(guideId: string, pageId: string): KeptDrafts {
   const prefix = `draft/${guideId}/`
   const own = prefix + pageId
-  const release = holdLock(own)
+  let release: () => void = () => undefined
   return {
     keep: (changes) => keep(own, changes),
     forget: () => forget(own),
@@ -46,7 +48,11 @@ export function keptDrafts(guideId: string, pageId: string): KeptDrafts {
         })
         .sort((a, b) => a.changes.at - b.changes.at)
     },
-    close: release,
+    hold: () => {
+      release()
+      release = holdLock(own)
+    },
+    letGo: () => release(),
   }
 }
 

@@ -9,24 +9,21 @@ import { DraftSession, type Outside, type SessionView } from './draftSession'
 import { keptDrafts } from './keptDrafts'
 import { newId } from './newId'
 
-const LOADING: SessionView = { is: 'loading' }
-const nothing = (): (() => void) => () => undefined
-
-/** Opens a guide's draft for as long as the page shows it, and saves it when the page goes. */
-export function useDraftState(guideId: string): { session: DraftSession | null; view: SessionView } {
-  const [session, setSession] = useState<DraftSession | null>(null)
+/**
+ * Opens a guide's draft for as long as the page shows it, and saves it when the page goes. For another guide the caller must be another
+ * component (by its key).
+ */
+export function useDraftState(guideId: string): { session: DraftSession; view: SessionView } {
+  const [session] = useState(() => new DraftSession(outsideOf(guideId)))
   useEffect(() => {
-    const opened = new DraftSession(outsideOf(guideId))
-    setSession(opened)
-    void opened.open()
-    const stop = listen(opened)
+    void session.open()
+    const stop = listen(session)
     return () => {
       stop()
-      opened.close()
-      setSession(null)
+      session.close()
     }
-  }, [guideId])
-  const view = useSyncExternalStore(session?.watch ?? nothing, session?.look ?? (() => LOADING))
+  }, [session])
+  const view = useSyncExternalStore(session.watch, session.look)
   return { session, view }
 }
 

@@ -124,7 +124,9 @@ function UseRow({ use, line, standing, onRemove }: UseRowProps) {
       <td className="balloon-cell">
         <Balloon line={use.line} />
       </td>
-      <td dir="auto">{name}</td>
+      <td>
+        <span dir="auto">{name}</span>
+      </td>
       <td className="r quantity-cell" data-field="quantity">
         <DecimalInput
           hideLabel
