@@ -26,8 +26,7 @@ export interface MadeFile {
 
 /** A refused file is an ordinary outcome: `why` names it for the program, `sentence` says it to the designer. */
 export type AnalyseOutcome =
-  | { ok: true; facts: ModelFacts; made: MadeFile[] }
-  | { ok: false; why: StlRefusal['why']; sentence: string }
+  { ok: true; facts: ModelFacts; made: MadeFile[] } | { ok: false; why: StlRefusal['why']; sentence: string }
 
 /** A picture in lines: paths for an SVG of this size, and where the named points came to lie. */
 export interface LineDrawing {

@@ -15,7 +15,11 @@ export interface DrawOptions {
   axes?: readonly (readonly [Point, Point])[]
   /** Parts whose lines are thin: rope, mesh, a neighbour that only shows where the rest belongs. */
   thin?: readonly string[]
+  /** Lines shorter than this many pixels are left out. Default 1.5; more for scans, whose surface is all small bends. */
+  speck?: number
 }
+
+const SPECK = 1.5
 
 /**
  * A line drawing of one solid, or of several at their places: outlines, sharp edges and borders with hidden lines taken away.
@@ -25,7 +29,12 @@ export function drawView(parts: readonly PlacedMesh[], options: DrawOptions = {}
   const projection = project(parts, { ...FROM_THE_FRONT, ...options.view })
   const buffer = depthBufferOf(projection)
   const thin = new Set(options.thin)
-  const strokes = { outline: [] as Stroke[], part: [] as Stroke[], thin: [] as Stroke[], chain: [] as Stroke[] }
+  const strokes = {
+    outline: [] as Stroke[],
+    part: [] as Stroke[],
+    thin: [] as Stroke[],
+    chain: [] as Stroke[],
+  }
   projection.parts.forEach((part, index) => {
     const isThin = thin.has(parts[index]!.name)
     for (const stroke of visibleLines(part, buffer))
@@ -43,6 +52,7 @@ export function drawView(parts: readonly PlacedMesh[], options: DrawOptions = {}
     if (point !== undefined) anchors[name] = point
   }
   const { width, height } = projection
+  const speck = options.speck ?? SPECK
   const inHundredths = (points: Record<string, { x: number; y: number }>) =>
     Object.fromEntries(
       Object.entries(points).map(([name, { x, y }]) => [
@@ -54,10 +64,10 @@ export function drawView(parts: readonly PlacedMesh[], options: DrawOptions = {}
     width,
     height,
     paths: {
-      outline: joinStrokes(strokes.outline),
-      part: joinStrokes(strokes.part),
-      thin: joinStrokes(strokes.thin),
-      chain: joinStrokes(strokes.chain),
+      outline: joinStrokes(strokes.outline, speck),
+      part: joinStrokes(strokes.part, speck),
+      thin: joinStrokes(strokes.thin, speck),
+      chain: joinStrokes(strokes.chain, speck),
     },
     anchors: inHundredths(anchors),
     balloons: inHundredths(placeBalloons(buffer, inside, anchors)),

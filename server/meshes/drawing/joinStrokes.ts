@@ -4,18 +4,16 @@ import type { Stroke } from './visibleLines'
 const STRAIGHT = 0.22
 /** Ends within a twentieth of a pixel are one point. */
 const GRID = 20
-/** Polylines shorter than this many pixels are specks. */
-const SPECK = 1.5
 
 type Line = [number, number][]
 
 /**
  * Path data of many strokes: joined end to end, straightened, rounded to tenths and written relative, so that a drawing stays small.
- * Where several lines meet, the one that goes on most nearly straight is taken.
+ * Where several lines meet, the one that goes on most nearly straight is taken. What is shorter than `speck` pixels is left out.
  */
-export function joinStrokes(strokes: readonly Stroke[]): string {
+export function joinStrokes(strokes: readonly Stroke[], speck: number): string {
   return chain(withoutDoubles(strokes))
-    .filter((line) => lengthOf(line) > SPECK)
+    .filter((line) => lengthOf(line) > speck)
     .map((line) => straighten(line))
     .map(pathOf)
     .join('')

@@ -108,7 +108,8 @@ export function placeBalloons(
       const angle = (turn / 48) * 2 * Math.PI
       for (let reach = 34; reach <= LONGEST; reach += 8) {
         const at = { x: tip.x + reach * Math.cos(angle), y: tip.y + reach * Math.sin(angle) }
-        if (at.x < BORDER || at.y < BORDER || at.x > sheet.width - BORDER || at.y > sheet.height - BORDER) break
+        if (at.x < BORDER || at.y < BORDER || at.x > sheet.width - BORDER || at.y > sheet.height - BORDER)
+          break
         const cost = reach + trouble(buffer, inside, at, tip, placed)
         if (cost < least) {
           least = cost

@@ -56,10 +56,7 @@ export function project(parts: readonly PlacedMesh[], view: View): Projection {
   if (min[0] === Infinity) return { width: view.width, height: view.width, parts: [], place: () => [0, 0, 0] }
   const spanX = Math.max(max[0]! - min[0]!, 1e-9)
   const spanY = Math.max(max[1]! - min[1]!, 1e-9)
-  const scale = Math.min(
-    (view.width - 2 * view.margin) / spanX,
-    (view.mostHeight - 2 * view.margin) / spanY,
-  )
+  const scale = Math.min((view.width - 2 * view.margin) / spanX, (view.mostHeight - 2 * view.margin) / spanY)
   const width = Math.ceil(spanX * scale + 2 * view.margin)
   const height = Math.ceil(spanY * scale + 2 * view.margin)
   const onSheet = (x: number, y: number, depth: number): [number, number, number] => [

@@ -40,7 +40,12 @@ export function measureMesh(mesh: Mesh): MeshMeasures {
     throw new RangeError(`Index ${index} of ${mesh.positions.length / 3} vertices`)
   const box = boxOf(mesh)
   const edges = edgesOf(mesh)
-  return { triangles: mesh.faces.length / 3, box, ...sumFacets(mesh, middleOf(box)), ...judgeEdges(mesh, edges) }
+  return {
+    triangles: mesh.faces.length / 3,
+    box,
+    ...sumFacets(mesh, middleOf(box)),
+    ...judgeEdges(mesh, edges),
+  }
 }
 
 /** The box along the axes about all vertices; all zero for a mesh without any. */
@@ -107,9 +112,7 @@ function sumFacets({ positions, faces }: Mesh, middle: [number, number, number])
     cz += six * (az + bz + qz)
   }
   const centre: [number, number, number] =
-    sixfold === 0
-      ? [mx, my, mz]
-      : [mx + cx / (4 * sixfold), my + cy / (4 * sixfold), mz + cz / (4 * sixfold)]
+    sixfold === 0 ? [mx, my, mz] : [mx + cx / (4 * sixfold), my + cy / (4 * sixfold), mz + cz / (4 * sixfold)]
   return { area: doubleArea / 2, volume: sixfold / 6, centre, degenerateFacets: flat }
 }
 

@@ -126,7 +126,8 @@ class AsciiReader {
 
   private skipLine(): void {
     // The word itself may have ended at the line's end: then its name is empty and the next line is not skipped.
-    while (this.at < this.bytes.length && this.bytes[this.at] !== NEWLINE && this.bytes[this.at] !== 13) this.at++
+    while (this.at < this.bytes.length && this.bytes[this.at] !== NEWLINE && this.bytes[this.at] !== 13)
+      this.at++
   }
 
   /**
@@ -160,7 +161,8 @@ class AsciiReader {
       const down = bytes[at] === 45
       if (down || bytes[at] === 43) at++
       if (at === end) return NaN
-      for (; at < end && bytes[at]! >= 48 && bytes[at]! <= 57; at++) exponent = exponent * 10 + (bytes[at]! - 48)
+      for (; at < end && bytes[at]! >= 48 && bytes[at]! <= 57; at++)
+        exponent = exponent * 10 + (bytes[at]! - 48)
       power += down ? -exponent : exponent
     }
     if (at < end) return NaN

@@ -20,8 +20,7 @@ export function readBinaryStl(bytes: Uint8Array, limit: number): StlOutcome {
   if (bytes.length < STL_HEADER_BYTES) return { ok: false, why: 'not-stl' }
   const promised = promisedFacets(bytes)
   const present = Math.floor((bytes.length - STL_HEADER_BYTES) / STL_FACET_BYTES)
-  if (promised === 0)
-    return { ok: false, why: bytes.length === STL_HEADER_BYTES ? 'no-facets' : 'not-stl' }
+  if (promised === 0) return { ok: false, why: bytes.length === STL_HEADER_BYTES ? 'no-facets' : 'not-stl' }
   const whole = present === promised && bytes.length === STL_HEADER_BYTES + promised * STL_FACET_BYTES
   if (!whole && !isPlausible(bytes, Math.min(present, promised))) return { ok: false, why: 'not-stl' }
   if (present < promised) return { ok: false, why: 'truncated', promised, present }
