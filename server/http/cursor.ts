@@ -1,21 +1,20 @@
-import type { z } from 'zod'
 import { Problem } from './problem'
 
-/** The place in a list where the next page begins, as text for an address. */
-export const cursorOf = (place: unknown): string => Buffer.from(JSON.stringify(place)).toString('base64url')
-
-/** What a cursor says, by its schema. @throws Problem bad-request for one that this site did not make. */
-export function placeOf<Schema extends z.ZodType>(schema: Schema, cursor: string): z.output<Schema> {
-  const parsed = schema.safeParse(readJson(Buffer.from(cursor, 'base64url').toString('utf8')))
-  if (parsed.success) return parsed.data
-  throw new Problem('bad-request', {}, [{ path: ['cursor'], message: 'Start at the first page again.' }])
+/** A place in a list that is ordered by a time and, where times are equal, by an id. */
+export interface Cursor {
+  at: Date
+  id: string
 }
 
-function readJson(text: string): unknown {
-  try {
-    return JSON.parse(text)
-  } catch (error) {
-    if (error instanceof SyntaxError) return undefined
-    throw error
+/** The place after which the next page begins, as text for an address: milliseconds, point, id. */
+export const cursorOf = (row: { id: string; createdAt: Date } | Cursor): string =>
+  `${('at' in row ? row.at : row.createdAt).getTime()}.${row.id}`
+
+/** @throws Problem bad-request for a cursor that this site did not make. */
+export function cursorFrom(cursor: string): Cursor {
+  const [, at, id] = /^(\d{1,15})\.([\w-]{1,60})$/.exec(cursor) ?? []
+  if (at === undefined || id === undefined) {
+    throw new Problem('bad-request', {}, [{ path: ['cursor'], message: 'Start at the first page again.' }])
   }
+  return { at: new Date(Number(at)), id }
 }

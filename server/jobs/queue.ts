@@ -47,8 +47,16 @@ export class JobQueue {
     })
   }
 
-  /** Adds a job inside the caller's transaction. With a `key`, a job that waits under the same key is not doubled. */
-  add(tx: Tx, kind: string, payload: unknown, options: { key?: string; delayMs?: number } = {}): void {
+  /**
+   * Adds a job inside the caller's transaction. With a `key`, a job that waits under the same key is not doubled. `rank` 0 goes
+   * first; what nobody waits for takes a higher one.
+   */
+  add(
+    tx: Tx,
+    kind: string,
+    payload: unknown,
+    options: { key?: string; delayMs?: number; rank?: number } = {},
+  ): void {
     const now = this.now()
     insertJob(tx, {
       id: this.newId(),
@@ -56,6 +64,7 @@ export class JobQueue {
       payload: JSON.stringify(payload),
       key: options.key ?? null,
       state: 'waiting',
+      rank: options.rank ?? 0,
       runAt: new Date(now.getTime() + (options.delayMs ?? 0)),
       createdAt: now,
     })

@@ -8,7 +8,7 @@ export function insertJob(tx: Tx, row: typeof jobs.$inferInsert): void {
   tx.insert(jobs).values(row).onConflictDoNothing({ target: jobs.key }).run()
 }
 
-/** Takes the oldest job that is due and marks it as running. */
+/** Takes the job of the lowest rank that is due longest, marks it as running and gives its key up: what comes now is new work. */
 export function takeJob(db: Db, now: Date): JobRow | undefined {
   return db.transaction(
     (tx) => {
@@ -16,13 +16,13 @@ export function takeJob(db: Db, now: Date): JobRow | undefined {
         .select()
         .from(jobs)
         .where(and(eq(jobs.state, 'waiting'), lte(jobs.runAt, now)))
-        .orderBy(asc(jobs.runAt))
+        .orderBy(asc(jobs.rank), asc(jobs.runAt))
         .limit(1)
         .get()
       if (due === undefined) return undefined
       return tx
         .update(jobs)
-        .set({ state: 'running', attempts: due.attempts + 1 })
+        .set({ state: 'running', attempts: due.attempts + 1, key: null })
         .where(eq(jobs.id, due.id))
         .returning()
         .get()
@@ -31,9 +31,8 @@ export function takeJob(db: Db, now: Date): JobRow | undefined {
   )
 }
 
-/** A key is given up when its job ends, so that the same work can be asked for again. */
 export function endJob(db: Db, id: string, state: 'done' | 'failed', now: Date, error: string | null): void {
-  db.update(jobs).set({ state, doneAt: now, error, key: null }).where(eq(jobs.id, id)).run()
+  db.update(jobs).set({ state, doneAt: now, error }).where(eq(jobs.id, id)).run()
 }
 
 export function putOff(db: Db, id: string, runAt: Date, error: string): void {

@@ -106,7 +106,8 @@ export class TestSite {
         id: newId(),
         token,
         userId: id,
-        expiresAt: new Date(now.getTime() + 30 * DAY_MS),
+        // better-auth reads the clock of the machine, whatever clock the test has.
+        expiresAt: new Date(Date.now() + 30 * DAY_MS),
         createdAt: now,
         updatedAt: now,
       })

@@ -86,7 +86,10 @@ export const draftStates = sqliteTable(
     savedBy: text('saved_by').references(() => users.id, { onDelete: 'set null' }),
     savedAt: integer('saved_at', { mode: 'timestamp_ms' }).notNull(),
   },
-  (table) => [primaryKey({ columns: [table.guideId, table.version] })],
+  (table) => [
+    primaryKey({ columns: [table.guideId, table.version] }),
+    index('draft_state_document').on(table.documentHash),
+  ],
 )
 
 /** Two authors changed one field: both versions, until a person has settled it. */
@@ -131,6 +134,7 @@ export const revisions = sqliteTable(
     uniqueIndex('revision_guide_number').on(table.guideId, table.number),
     uniqueIndex('revision_guide_label').on(table.guideId, table.label),
     index('revision_published').on(table.publishedAt),
+    index('revision_document').on(table.documentHash),
     check('revision_label_not_empty', sql`length(${table.label}) > 0`),
   ],
 )

@@ -11,12 +11,14 @@ export const jobs = sqliteTable(
     key: text('key').unique(),
     state: text('state', { enum: ['waiting', 'running', 'done', 'failed'] }).notNull(),
     attempts: integer('attempts').notNull().default(0),
+    /** Of the jobs that are due the lowest rank goes first: 0 for what somebody waits for, more for what can wait. */
+    rank: integer('rank').notNull().default(0),
     runAt: integer('run_at', { mode: 'timestamp_ms' }).notNull(),
     error: text('error'),
     createdAt: integer('created_at', { mode: 'timestamp_ms' }).notNull(),
     doneAt: integer('done_at', { mode: 'timestamp_ms' }),
   },
-  (table) => [index('job_due').on(table.state, table.runAt)],
+  (table) => [index('job_due').on(table.state, table.rank, table.runAt)],
 )
 
 /** Mail to send and mail sent. Written in the transaction that causes it; a failed send is tried again, never dropped. */
