@@ -1,7 +1,7 @@
 import { useTranslation } from 'react-i18next'
 import type { Id } from '../../../../shared/lib/ids/id'
 import { useDraft } from '../draftStore'
-import { stepsOf } from '../outline/removeFromOutline'
+import { stepsOf } from '../../../../shared/guide/stepsOf'
 import { FindingList } from './FindingList'
 
 /** Beside the page that is edited: what must and should be mended in the whole guide, and this step in short. */

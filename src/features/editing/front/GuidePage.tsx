@@ -27,7 +27,7 @@ export function GuidePage() {
     edit((doc) => ({ ...doc, ...patch }), `guide.${field}`)
   const licenceItems = (licences.data ?? []).map(({ id, name }) => ({
     id,
-    text: `${name} (${id})`,
+    text: `${id}: ${name}`,
     content: (
       <span className="choice-of-licence">
         <span>{name}</span>

@@ -13,7 +13,7 @@ import { FindingMark } from './FindingMark'
 import { placeOf } from './moveInOutline'
 import { nudgeBy } from './nudgeBy'
 import { useRowDrag } from './OutlineDrag'
-import { stepsOf } from './removeFromOutline'
+import { stepsOf } from '../../../../shared/guide/stepsOf'
 import type { OutlineActs } from './useOutlineActs'
 
 interface Props {

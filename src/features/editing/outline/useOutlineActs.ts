@@ -1,17 +1,18 @@
 import { useTranslation } from 'react-i18next'
 import { useNavigate } from 'react-router-dom'
+import { copyStep } from '../../../../shared/guide/copyStep'
 import { insertNode, moveNode, setNode } from '../../../../shared/guide/edit'
 import { emptyStep } from '../../../../shared/guide/emptyDocument'
 import { numbering } from '../../../../shared/guide/numbering'
+import { removeWithReferences } from '../../../../shared/guide/removeWithReferences'
+import { stepsOf } from '../../../../shared/guide/stepsOf'
 import type { GuideDocument, Section, Step } from '../../../../shared/guide/schema'
 import type { Id } from '../../../../shared/lib/ids/id'
 import { useDraft } from '../draftStore'
 import { guideAddress, stepAddress } from '../frame/addresses'
 import { useOpenDraft } from '../frame/sessionContext'
 import { focusPlace, type GoingTo } from '../frame/useGoToPlace'
-import { copyStep } from './copyStep'
 import { drop, nudgeSection, nudgeStep, placeOf, type Drop } from './moveInOutline'
-import { removeSection, removeStep, stepsOf } from './removeFromOutline'
 
 export interface OutlineActs {
   nudge: (kind: 'step' | 'section', id: Id, by: -1 | 1) => void
@@ -84,22 +85,22 @@ export function useOutlineActs(currentStep: Id | null): OutlineActs {
       void navigate(`${stepAddress(guideId, step.id)}?field=title`)
     },
     copy: (step) => {
-      const { document: after, copy } = copyStep(document, step.id, newId)
-      if (copy === null) return
-      edit(() => after)
+      const copied = copyStep(document, step.id, newId)
+      if (copied === undefined) return
+      edit(() => copied.document)
       announce(t('outline.copied', { number: numbers.step[step.id] }))
-      void navigate(`${stepAddress(guideId, copy)}?field=title`)
+      void navigate(`${stepAddress(guideId, copied.copy)}?field=title`)
     },
     rename: (sectionId, title) =>
       edit((doc) => setNode(doc, 'section', sectionId, { title }), `section.title.${sectionId}`),
     removeStep: (step) => {
-      const after = removeStep(document, step.id)
+      const after = removeWithReferences(document, 'step', step.id)
       edit(() => after)
       sayDone(t('outline.stepRemoved', { number: numbers.step[step.id], title: step.title }))
       leave(after, [step.id])
     },
     removeSection: (section) => {
-      const after = removeSection(document, section.id)
+      const after = removeWithReferences(document, 'section', section.id)
       edit(() => after)
       sayDone(
         t('outline.sectionRemoved', { letter: numbers.section[section.id], count: section.steps.length }),

@@ -290,9 +290,7 @@ export class DraftSession {
       return answer.files
     } catch (error) {
       if (!(error instanceof RequestProblem || error instanceof NoAnswer)) throw error
-      this.patch((rest) => ({
-        refusedFiles: [...rest.refusedFiles, ...names.map((name) => ({ name, why: error }))],
-      }))
+      this.patch((rest) => ({ refusedFiles: [...rest.refusedFiles, ...refusedOf(error, names)] }))
       return []
     } finally {
       this.patch((rest) => ({ sending: rest.sending.filter((each) => each.id !== id) }))
@@ -543,6 +541,15 @@ const joined = (old: readonly DraftConflict[], fresh: readonly DraftConflict[]):
   ...old.filter((conflict) => !fresh.some((other) => other.id === conflict.id)),
   ...fresh,
 ]
+
+/** Where none was taken, the problem names each file with its sentence; else all of them failed alike. */
+function refusedOf(error: Error, names: readonly string[]): RefusedFile[] {
+  const each = error instanceof RequestProblem ? (error.details.errors ?? []) : []
+  const named = each.flatMap(({ path, message }) =>
+    path[0] === 'files' && path.length === 3 ? [{ name: String(path[2]), why: message }] : [],
+  )
+  return named.length > 0 ? named : names.map((name) => ({ name, why: error }))
+}
 
 /** The document with these files among its assets. */
 function withAssets(document: GuideDocument, files: readonly FileEntry[]): GuideDocument {

@@ -8,7 +8,7 @@ import { GuideText } from '../fields/GuideText'
 import { useDraft } from '../draftStore'
 import { focusPlace } from '../frame/useGoToPlace'
 import { useOpenDraft } from '../frame/sessionContext'
-import { stepsOf } from '../outline/removeFromOutline'
+import { stepsOf } from '../../../../shared/guide/stepsOf'
 
 /** The tools of a step, out of the guide's tools. A tool that no step needs any more leaves the guide. */
 export function StepTools({ step }: { step: Step }) {

@@ -1,10 +1,9 @@
 import fc from 'fast-check'
 import { describe, expect, test } from 'vitest'
 import { emptyDocument, emptyStep } from '../../../../shared/guide/emptyDocument'
-import { GuideDocument, type Step } from '../../../../shared/guide/schema'
-import { copyStep } from './copyStep'
+import type { GuideDocument, Step } from '../../../../shared/guide/schema'
+import { stepsOf } from '../../../../shared/guide/stepsOf'
 import { drop, nudgeSection, nudgeStep } from './moveInOutline'
-import { removeSection, removeStep, stepsOf } from './removeFromOutline'
 
 let counter = 0
 const newId = () => `node${String((counter += 1)).padStart(10, '0')}`
@@ -100,89 +99,5 @@ describe('moving in the outline', () => {
       }),
       { seed: 20261201 },
     )
-  })
-})
-
-describe('copying a step', () => {
-  test('gives new ids to everything in it and leaves the guide valid', () => {
-    const first = outline('ab')
-    const step: Step = {
-      ...first.sections[0]!.steps[0]!,
-      title: 'Mount it',
-      figures: [named('figure')],
-      cautions: [{ id: named('hot'), signal: 'warning', hazard: 'Hot.', avoid: 'Wait.', wear: ['M009'] }],
-      checks: [{ id: named('sag'), text: 'Sag', measure: null }],
-      uses: [{ id: named('use'), line: named('line'), quantity: { value: '4', unit: 'each' } }],
-      body: {
-        type: 'doc',
-        content: [
-          {
-            type: 'orderedList',
-            attrs: { id: named('list') },
-            content: [
-              {
-                type: 'listItem',
-                attrs: { id: named('item') },
-                content: [
-                  {
-                    type: 'paragraph',
-                    attrs: { id: named('words') },
-                    content: [{ type: 'figureRef', attrs: { figure: named('figure') } }],
-                  },
-                ],
-              },
-            ],
-          },
-        ],
-      },
-    }
-    const document: GuideDocument = {
-      ...first,
-      sections: [{ ...first.sections[0]!, steps: [step, first.sections[0]!.steps[1]!] }],
-      figures: [{ id: named('figure'), kind: 'photo', asset: null, caption: '', alt: '', callouts: [] }],
-    }
-    const { document: after, copy } = copyStep(document, step.id, newId)
-    expect(GuideDocument.parse(after)).toEqual(after)
-    const copied = stepsOf(after)[1]!
-    expect(copied).toMatchObject({ id: copy, title: 'Mount it' })
-    const ids = (value: unknown): string[] => JSON.stringify(value).match(/"id":"[^"]+"/g) ?? []
-    expect(new Set(ids(after)).size).toBe(ids(after).length)
-    expect(copied.figures).toEqual([after.figures[1]!.id])
-    expect(JSON.stringify(copied.body)).toContain(`"figure":"${after.figures[1]!.id}"`)
-  })
-})
-
-describe('removing', () => {
-  const figure = (id: string) => ({
-    id,
-    kind: 'photo' as const,
-    asset: null,
-    caption: '',
-    alt: '',
-    callouts: [],
-  })
-  test('takes the figures along that nothing else shows', () => {
-    const first = outline('ab|c')
-    const show = (letter: string, figures: string[]) => (step: Step) =>
-      step.id === named(letter) ? { ...step, figures } : step
-    const document: GuideDocument = {
-      ...first,
-      front: named('front'),
-      figures: [figure(named('own')), figure(named('both')), figure(named('front'))],
-      sections: first.sections.map((section) => ({
-        ...section,
-        steps: section.steps
-          .map(show('a', [named('own'), named('both'), named('front')]))
-          .map(show('c', [named('both')])),
-      })),
-    }
-    expect(removeStep(document, named('a')).figures.map((each) => each.id)).toEqual([
-      named('both'),
-      named('front'),
-    ])
-    expect(read(removeStep(document, named('a')))).toBe('b|c')
-    expect(read(removeSection(document, named('S0')))).toBe('c')
-    expect(removeSection(document, named('S0')).figures).toHaveLength(2)
-    expect(removeStep(document, named('nothing')).figures).toHaveLength(3)
   })
 })

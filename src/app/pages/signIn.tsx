@@ -1,0 +1,5 @@
+export { ConfirmPage } from '../../features/accounts/components/ConfirmPage'
+export { LinkPage } from '../../features/accounts/components/LinkPage'
+export { ResetPage } from '../../features/accounts/components/ResetPage'
+export { SignInPage } from '../../features/accounts/components/SignInPage'
+export { SignUpPage } from '../../features/accounts/components/SignUpPage'
