@@ -1,12 +1,13 @@
 import Big from 'big.js'
 import type { Id } from '../lib/ids/id'
 import { convert, type UnitCode } from '../lib/units/units'
-import type { Choices } from './holds'
-import { resolve } from './resolve'
-import type { GuideDocument, Line, Quantity } from './schema'
+import { holds, type Choices } from './holds'
+import type { GuideDocument, Line, Quantity, Step, Use } from './schema'
+import { stepsOf } from './stepsOf'
 
 /**
- * How a line's quantity stands to what the steps use. `unused`: no step takes it. `as needed`: neither side counts.
+ * How a line's quantity stands to what the steps use. `unused`: no step takes it. `as needed`: the steps do not
+ * say how many (the list may).
  * `units differ`: a use is in a unit that does not convert into the line's. `no quantity`: the steps count, the list does not.
  */
 export type Balance =
@@ -28,34 +29,55 @@ export interface Reconciliation {
   unlisted: { step: Id; use: Id; line: Id }[]
 }
 
-/** For each line: what the steps use against what the list asks for, under these choices. Sums are exact. */
-export function reconcile(doc: GuideDocument, choices: Choices = {}): Reconciliation {
-  const all = new Set(doc.lines.map((line) => line.id))
-  const unlisted = doc.sections.flatMap((section) =>
-    section.steps.flatMap((step) =>
-      step.uses
-        .filter((use) => !all.has(use.line))
-        .map((use) => ({ step: step.id, use: use.id, line: use.line })),
-    ),
-  )
-  const present = resolve(doc, choices)
-  return { lines: present.lines.map((line) => balanceOf(present, line)), unlisted }
+/** A use with the step that it stands in. */
+export interface UseInStep {
+  step: Step
+  use: Use
 }
 
-function balanceOf(doc: GuideDocument, line: Line): Reconciled {
-  const uses = doc.sections.flatMap((section) =>
-    section.steps.flatMap((step) =>
-      step.uses
-        .filter((use) => use.line === line.id)
-        .map((use) => ({ step: step.id, quantity: use.quantity })),
-    ),
+/** All uses by the line that they take from, in reading order; also those of lines that the list does not have. */
+export function usesByLine(doc: GuideDocument): ReadonlyMap<Id, UseInStep[]> {
+  const uses = new Map<Id, UseInStep[]>()
+  for (const step of stepsOf(doc)) {
+    for (const use of step.uses) {
+      const found = uses.get(use.line)
+      if (found === undefined) uses.set(use.line, [{ step, use }])
+      else found.push({ step, use })
+    }
+  }
+  return uses
+}
+
+/** For each line that is there under these choices: what the steps use against what the list asks for. Sums are exact. Cost O(nodes). */
+export function reconcile(doc: GuideDocument, choices: Choices = {}): Reconciliation {
+  const uses = usesByLine(doc)
+  const listed = new Set(doc.lines.map((line) => line.id))
+  return {
+    lines: doc.lines
+      .filter((line) => holds(doc, choices, line.when))
+      .map((line) => reconcileLine(doc, line, uses.get(line.id) ?? [], choices)),
+    unlisted: [...uses.entries()]
+      .filter(([line]) => !listed.has(line))
+      .flatMap(([line, found]) => found.map(({ step, use }) => ({ step: step.id, use: use.id, line }))),
+  }
+}
+
+/** One line against its uses, of which those count that are there under these choices. */
+export function reconcileLine(
+  doc: GuideDocument,
+  line: Line,
+  uses: readonly UseInStep[],
+  choices: Choices,
+): Reconciled {
+  const present = uses.filter(
+    ({ step, use }) => holds(doc, choices, step.when) && holds(doc, choices, use.when),
   )
-  const steps = [...new Set(uses.map((use) => use.step))]
-  const counted = uses.flatMap((use) => (use.quantity === null ? [] : [use.quantity]))
+  const steps = [...new Set(present.map(({ step }) => step.id))]
+  const counted = present.flatMap(({ use }) => (use.quantity === null ? [] : [use.quantity]))
   const unit = line.quantity?.unit ?? counted[0]?.unit ?? 'each'
   const used = counted.length === 0 ? null : sumIn(unit, counted)
   const found = { line: line.id, listed: line.quantity, used: used ?? null, steps }
-  if (uses.length === 0) return { ...found, balance: 'unused' }
+  if (present.length === 0) return { ...found, balance: 'unused' }
   if (used === undefined) return { ...found, balance: 'units differ' }
   if (used === null) return { ...found, balance: 'as needed' }
   if (line.quantity === null) return { ...found, balance: 'no quantity' }

@@ -116,19 +116,20 @@ export type UnitCode = keyof typeof UNITS
 export const unitCodes = Object.keys(UNITS) as [UnitCode, ...UnitCode[]]
 export const UnitCode = z.enum(unitCodes)
 
-/** Digits kept behind the point where a division does not end; the product of two conversions returns within 1e-24. */
+/** Digits kept behind the point where a division does not end. */
 const DIVISION_DIGITS = 30
 
 const exact = Big()
 exact.DP = DIVISION_DIGITS
 
-function fraction(text: string): Big {
-  const [above, below] = text.split('/')
-  return below === undefined ? exact(above!) : exact(above!).div(below)
+function fraction(text: string): { above: Big; below: Big } {
+  const [above, below = '1'] = text.split('/')
+  return { above: exact(above!), below: exact(below) }
 }
 
 /**
- * A value in another unit of the same dimension, as a decimal string without rounding where the factors end, else to 30 digits.
+ * A value in another unit of the same dimension, as a decimal string: exact where it ends, else to 30 digits behind the point. All is
+ * multiplied out first and divided once, so that 0 °C is 32 °F and no digit near it.
  * @returns undefined where the two cannot be converted (a length into a mass, a pair into a set).
  */
 export function convert(value: string, from: UnitCode, to: UnitCode): string | undefined {
@@ -136,13 +137,16 @@ export function convert(value: string, from: UnitCode, to: UnitCode): string | u
   const a: Unit = UNITS[from]
   const b: Unit = UNITS[to]
   if (a.dimension !== b.dimension || a.dimension === 'count') return undefined
-  const base = exact(value)
-    .times(fraction(a.factor))
-    .plus(fraction(a.offset ?? '0'))
-  const [above, below = '1'] = b.factor.split('/')
-  const result = base
-    .minus(fraction(b.offset ?? '0'))
-    .times(below)
-    .div(above!)
-  return result.toFixed()
+  const [factorA, factorB] = [fraction(a.factor), fraction(b.factor)]
+  const [offsetA, offsetB] = [fraction(a.offset ?? '0'), fraction(b.offset ?? '0')]
+  // (value · fA + oA − oB) / fB, each a fraction
+  const above = exact(value)
+    .times(factorA.above)
+    .times(offsetA.below)
+    .times(offsetB.below)
+    .plus(offsetA.above.times(factorA.below).times(offsetB.below))
+    .minus(offsetB.above.times(factorA.below).times(offsetA.below))
+    .times(factorB.below)
+  const below = factorA.below.times(offsetA.below).times(offsetB.below).times(factorB.above)
+  return above.div(below).toFixed()
 }
