@@ -27,7 +27,9 @@ export function whoAsks(ctx: Context, auth: Auth) {
       const person = session === null ? undefined : readPerson(ctx.db, session.user.id)
       if (session !== null && person !== undefined && (ctx.config.demo || !isDemoAddress(person.email))) {
         asking.set(req, { person, sessionId: session.session.id })
-        if (headers.getSetCookie().length > 0) showName(res, ctx.config, person.name)
+        if (headers.getSetCookie().length > 0 || !req.headers.cookie.includes('quern_name=')) {
+          showName(res, ctx.config, person)
+        }
       } else if (req.headers.cookie.includes('quern_name=')) clearName(res, ctx.config)
     }
     next()

@@ -5,10 +5,12 @@ import { I18nextProvider } from 'react-i18next'
 import { RouterProvider } from 'react-router-dom'
 import { I18nProvider } from 'react-aria-components'
 import { createI18n, directionOf } from '../lib/i18n'
+import { interfaceLanguage } from '../lib/interfaceLanguage'
 import { createQueryClient } from '../lib/queryClient'
 import { createRouter } from './router'
 
-const language = document.documentElement.lang
+const language = interfaceLanguage()
+document.documentElement.lang = language
 document.documentElement.dir = directionOf(language)
 const queryClient = createQueryClient()
 const root = document.getElementById('app')

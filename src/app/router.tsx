@@ -3,6 +3,7 @@ import { createBrowserRouter } from 'react-router-dom'
 import { Frame } from './frame'
 import { NotFound } from './notFound'
 import { PageTrouble } from './pageTrouble'
+import { accountRoutes } from './pages/accountRoutes'
 import { draftRoutes } from './pages/draftRoutes'
 
 /** The application's addresses. Reading pages are documents of their own and are reached by whole loads. */
@@ -11,7 +12,7 @@ export function createRouter(_queryClient: QueryClient) {
     {
       element: <Frame />,
       errorElement: <PageTrouble />,
-      children: [...draftRoutes, { path: '*', element: <NotFound /> }],
+      children: [...accountRoutes, ...draftRoutes, { path: '*', element: <NotFound /> }],
     },
   ])
 }

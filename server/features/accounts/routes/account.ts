@@ -25,8 +25,9 @@ export function ownAccountRoutes(router: Router, ctx: Context, auth: Auth): void
     const person = signedIn(req)
     const change = parseBody(ChangeAccount, req)
     changeOwn(ctx.db, person.id, change, ctx.now())
-    showName(res, ctx.config, change.name ?? person.name)
-    res.json(presentAccount(ctx.db, person.id))
+    const account = presentAccount(ctx.db, person.id)
+    showName(res, ctx.config, account)
+    res.json(account)
   })
 
   router.post('/account/email', mailTries(), async (req, res) => {

@@ -20,8 +20,9 @@ export function signInRoutes(router: Router, ctx: Context, auth: Auth): void {
       auth.api.signInEmail({ body, headers: headersOf(req), returnHeaders: true }),
     )
     passCookies(res, headers)
-    showName(res, ctx.config, response.user.name)
-    res.json(presentAccount(ctx.db, response.user.id))
+    const account = presentAccount(ctx.db, response.user.id)
+    showName(res, ctx.config, account)
+    res.json(account)
   })
 
   router.post('/sessions/link', mailTries(), async (req, res) => {
@@ -39,8 +40,9 @@ export function signInRoutes(router: Router, ctx: Context, auth: Auth): void {
       auth.api.magicLinkVerify({ query: { token }, headers: headersOf(req), returnHeaders: true }),
     )
     passCookies(res, headers)
-    showName(res, ctx.config, response.user.name)
-    res.json(presentAccount(ctx.db, response.user.id))
+    const account = presentAccount(ctx.db, response.user.id)
+    showName(res, ctx.config, account)
+    res.json(account)
   })
 
   router.delete('/sessions/current', async (req, res) => {

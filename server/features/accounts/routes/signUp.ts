@@ -34,8 +34,8 @@ export function signUpRoutes(router: Router, ctx: Context, auth: Auth): void {
       auth.api.verifyEmail({ query: { token }, headers: headersOf(req), returnHeaders: true }),
     )
     passCookies(res, headers)
-    const person = await signedInBy(auth, headers)
-    if (person !== undefined) showName(res, ctx.config, person.name)
+    const person = await signedInBy(ctx.db, auth, headers)
+    if (person !== undefined) showName(res, ctx.config, person)
     res.json({ signedIn: person !== undefined })
   })
 }
