@@ -28,7 +28,11 @@ export default defineConfig({
         target: 'node20',
         sourcemap: true,
         rollupOptions: {
-          input: { main: 'server/main.ts', renderPage: 'src/app/renderPage.tsx' },
+          input: {
+            main: 'server/main.ts',
+            worker: 'server/workers/worker.ts',
+            renderPage: 'src/app/renderPage.tsx',
+          },
           output: { entryFileNames: '[name].js' },
         },
       },

@@ -6,6 +6,7 @@ import { createAuth } from './auth/auth'
 import { whoAsks } from './auth/person'
 import type { Context } from './context'
 import { featureRoutes } from './features'
+import { serveFiles } from './files/serveFiles'
 import { Problem } from './http/problem'
 import type { Pages } from './pages/pages'
 
@@ -38,6 +39,8 @@ export function createApp(ctx: Context, pages: Pages): Express {
       strictTransportSecurity: ctx.config.appUrl.startsWith('https:'),
     }),
   )
+  // Before anybody is asked who they are: pictures are read by everybody, and there are many of them.
+  app.use('/files', serveFiles(ctx))
   const auth = createAuth(ctx)
   app.use(
     '/api',

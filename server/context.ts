@@ -6,6 +6,7 @@ import { openDb, type Db } from './db/open'
 import { FolderStorage } from './files/folderStorage'
 import type { Storage } from './files/storage'
 import { JobQueue } from './jobs/queue'
+import { createWorkers, type Workers } from './workers/workers'
 
 /** Everything with a life, built once from the configuration. A test builds its own and replaces what it needs. */
 export interface Context {
@@ -13,6 +14,7 @@ export interface Context {
   db: Db
   storage: Storage
   jobs: JobQueue
+  workers: Workers
   log: Logger
   now: () => Date
   newId: () => string
@@ -31,16 +33,19 @@ export function createContext(config: Config, overrides: Partial<Context> = {}):
   const log = overrides.log ?? pino({ level: config.production ? 'info' : 'debug' })
   const now = overrides.now ?? (() => new Date())
   const jobs = new JobQueue(opened.db, log, now, newId)
+  const workers = overrides.workers ?? createWorkers(log)
   return {
     config,
     db: opened.db,
     storage: new FolderStorage(path.join(config.dataDir, 'files')),
     jobs,
+    workers,
     log,
     now,
     newId,
     close: async () => {
       await jobs.stop()
+      await workers.close()
       opened.close()
     },
     ...overrides,

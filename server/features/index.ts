@@ -1,9 +1,11 @@
 import { Router } from 'express'
 import type { Auth } from '../auth/auth'
 import type { Context } from '../context'
+import { handleFileJobs } from '../files/handleFileJobs'
 import { handleMailJobs } from '../mail/handleMailJobs'
 import { accountRoutes } from './accounts/routes'
 import { draftRoutes } from './drafts/routes'
+import { fileRoutes } from './files/routes'
 import { guideRoutes } from './guides/routes'
 import { mailRoutes } from './mail/routes'
 import { peopleRoutes } from './people/routes'
@@ -16,10 +18,12 @@ export function featureRoutes(ctx: Context, auth: Auth): Router {
   router.use(peopleRoutes(ctx))
   router.use(guideRoutes(ctx))
   router.use(draftRoutes(ctx))
+  router.use(fileRoutes(ctx))
   return router
 }
 
 /** The work of every feature that outlives a request, by kind of job. Called once before the queue starts. */
 export function featureJobs(ctx: Context): void {
   handleMailJobs(ctx)
+  handleFileJobs(ctx)
 }

@@ -51,7 +51,8 @@ export class Client {
   ) {}
 
   get(path: string, headers: HeaderList = {}): Promise<Answer> {
-    return this.send('GET', path, undefined, headers)
+    // fetch would add no-cache to a conditional request, and no server may answer 304 to that.
+    return this.send('GET', path, undefined, { 'cache-control': 'max-age=0', ...headers })
   }
   post(path: string, body?: unknown, headers: HeaderList = {}): Promise<Answer> {
     return this.send('POST', path, body, headers)

@@ -87,13 +87,9 @@ describe('reading', () => {
   test('If-None-Match of the version that is there answers 304, of an older one the draft', async () => {
     const { owner, id, first } = await start()
     const at = `/api/guides/${id}/draft`
-    expect(
-      (await site.as(owner).get(at, { 'if-none-match': '"1"', 'cache-control': 'max-age=0' })).status,
-    ).toBe(304)
+    expect((await site.as(owner).get(at, { 'if-none-match': '"1"' })).status).toBe(304)
     await save(owner, id, title(first, 'Other'), 1)
-    expect(
-      (await site.as(owner).get(at, { 'if-none-match': '"1"', 'cache-control': 'max-age=0' })).status,
-    ).toBe(200)
+    expect((await site.as(owner).get(at, { 'if-none-match': '"1"' })).status).toBe(200)
   })
 })
 

@@ -17,7 +17,7 @@ import { featureJobs } from '../../server/features'
 import type { Pages } from '../../server/pages/pages'
 import { Client } from './client'
 
-export { Client, type Answer } from './client'
+export { Client, type Answer, type FileToSend } from './client'
 
 /** For the site's own cookie, which better-auth signs so: token, point, HMAC-SHA256 in base64. */
 const SECRET = 'a secret for tests that is long enough'
@@ -54,6 +54,8 @@ export class TestSite {
   static async start(options: TestSiteOptions = {}): Promise<TestSite> {
     const dataDir = options.dataDir ?? freshDataDir()
     const server = createServer()
+    // The test shares the thread: while it computes, a connection must not be taken for an idle one.
+    server.keepAliveTimeout = 120_000
     server.listen(0, '127.0.0.1')
     await once(server, 'listening')
     const { port } = server.address() as AddressInfo
