@@ -1,6 +1,7 @@
 import Big from 'big.js'
 import type { Id } from '../lib/ids/id'
 import { convert, type UnitCode } from '../lib/units/units'
+import { setNode } from './edit'
 import { holds, type Choices } from './holds'
 import type { GuideDocument, Line, Quantity, Step, Use } from './schema'
 import { stepsOf } from './stepsOf'
@@ -101,8 +102,8 @@ export function sumIn(unit: UnitCode, quantities: readonly Quantity[]): Quantity
  * @returns the same document where there is nothing to take.
  */
 export function takeFromSteps(doc: GuideDocument, lineId: Id, choices: Choices = {}): GuideDocument {
-  const found = reconcile(doc, choices).lines.find((entry) => entry.line === lineId)
-  if (found === undefined || found.used === null || found.balance === 'even') return doc
-  const { used } = found
-  return { ...doc, lines: doc.lines.map((line) => (line.id === lineId ? { ...line, quantity: used } : line)) }
+  const line = doc.lines.find(({ id }) => id === lineId)
+  if (line === undefined) return doc
+  const { used, balance } = reconcileLine(doc, line, usesByLine(doc).get(lineId) ?? [], choices)
+  return used === null || balance === 'even' ? doc : setNode(doc, 'line', lineId, { quantity: used })
 }
