@@ -9,7 +9,7 @@ import { Button } from '../../../components/controls/Button'
 import { RequestProblem } from '../../../lib/request'
 import { useSentence } from '../../../lib/useSentence'
 import { DraftContext, type DraftAtHand } from '../draftStore'
-import { findingsOf } from '../findings/findingsOf'
+import { judge } from '../findings/judge'
 import { ReadinessPanel } from '../findings/ReadinessPanel'
 import { Outline } from '../outline/Outline'
 import type { DraftSession, DraftView } from '../state/draftSession'
@@ -107,10 +107,10 @@ function OpenFrame({
   // Readiness looks at the whole guide: it follows a moment after what is typed.
   const settledDocument = useDeferredValue(document)
   const settledFiles = useDeferredValue(files)
-  const findings = useMemo(() => findingsOf(settledDocument, settledFiles), [settledDocument, settledFiles])
+  const judged = useMemo(() => judge(settledDocument, settledFiles), [settledDocument, settledFiles])
   const open = useMemo<OpenDraft>(
-    () => ({ guideId, session, view, findings, sayDone }),
-    [guideId, session, view, findings, sayDone],
+    () => ({ guideId, session, view, sayDone, ...judged }),
+    [guideId, session, view, sayDone, judged],
   )
   usePageTitle(document.title === '' ? t('frame.untitled') : document.title)
   return (

@@ -1,13 +1,12 @@
 import { createContext, useContext } from 'react'
-import type { Finding } from '../../../../shared/guide/finding'
+import type { Judged } from '../findings/judge'
 import type { DraftSession, DraftView } from '../state/draftSession'
 
 /** What the frame of the drafting page knows beside the document: for its own parts. */
-export interface OpenDraft {
+export interface OpenDraft extends Judged {
   guideId: string
   session: DraftSession
   view: DraftView
-  findings: readonly Finding[]
   /** Says that something was done that undo brings back, with the button for it. */
   sayDone: (sentence: string) => void
 }

@@ -63,7 +63,10 @@ export function GuidePage() {
             label={t('front.machine')}
             value={document.machine}
             disabled={readOnly}
-            options={MachineKind.options.map((kind) => ({ value: kind, label: t(`machine.${kind}`) }))}
+            options={MachineKind.options.map((kind) => ({
+              value: kind,
+              label: t(`machine.${kind}`, { ns: 'guide' }),
+            }))}
             onChange={(event) => set({ machine: MachineKind.parse(event.target.value) }, 'machine')}
           />
         </div>

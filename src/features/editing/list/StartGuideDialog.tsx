@@ -47,7 +47,10 @@ function StartForm() {
       />
       <Select
         {...form.field('machine')}
-        options={MachineKind.options.map((kind) => ({ value: kind, label: t(`machine.${kind}`) }))}
+        options={MachineKind.options.map((kind) => ({
+          value: kind,
+          label: t(`machine.${kind}`, { ns: 'guide' }),
+        }))}
       />
       <div className="actions">
         <Button kind="go" type="submit" busy={form.busy}>

@@ -22,15 +22,16 @@ export function Outline({ currentStep }: { currentStep: Id | null }) {
   const { guideId, findings } = useOpenDraft()
   const { document, edit, newId, readOnly } = useDraft()
   const navigate = useNavigate()
-  const { pathname } = useLocation()
+  const { search, key } = useLocation()
   const [open, setOpen] = useState(false)
-  const [openedAt, setOpenedAt] = useState(pathname)
+  const [openedAt, setOpenedAt] = useState('')
   const listId = useId()
   const acts = useOutlineActs(currentStep)
-  // On a phone the outline closes behind the step that was chosen.
-  if (openedAt !== pathname) {
-    setOpenedAt(pathname)
-    setOpen(false)
+  // On a phone the outline closes behind the step that was chosen, and opens for a section that a finding leads to.
+  if (openedAt !== key) {
+    const wanted = new URLSearchParams(search).get('node')
+    setOpenedAt(key)
+    setOpen(document.sections.some((section) => section.id === wanted))
   }
 
   const addStep = (): void => {

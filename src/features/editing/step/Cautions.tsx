@@ -59,6 +59,7 @@ function CautionFields({ caution, onRemove }: { caution: Caution; onRemove: () =
   const { edit, readOnly } = useDraft()
   const set = (patch: Partial<Caution>, field: string): void =>
     edit((doc) => setNode(doc, 'caution', caution.id, patch), `caution.${field}.${caution.id}`)
+  const wearName = (code: string): string => t(`wear.${code}`, { ns: 'guide', defaultValue: code })
   const rest = WEAR_CODES.filter((code) => !caution.wear.includes(code))
   return (
     <div
@@ -78,7 +79,7 @@ function CautionFields({ caution, onRemove }: { caution: Caution; onRemove: () =
         >
           {SignalWord.options.map((word) => (
             <option key={word} value={word}>
-              {t(`caution.word.${word}`)}
+              {t(`signal.${word}`, { ns: 'guide' })}
             </option>
           ))}
         </select>
@@ -112,13 +113,12 @@ function CautionFields({ caution, onRemove }: { caution: Caution; onRemove: () =
           <ul className="wear">
             {caution.wear.map((code) => (
               <li key={code}>
-                <span>{t(`wear.${code}`, { defaultValue: code })}</span>{' '}
-                <span className="graphite num">{code}</span>
+                <span>{wearName(code)}</span> <span className="graphite num">{code}</span>
                 {!readOnly && (
                   <button
                     type="button"
                     className="remove"
-                    aria-label={t('caution.removeWear', { name: t(`wear.${code}`, { defaultValue: code }) })}
+                    aria-label={t('caution.removeWear', { name: wearName(code) })}
                     onClick={() =>
                       set({ wear: caution.wear.filter((each) => each !== code) }, `wear.${code}`)
                     }
@@ -134,10 +134,10 @@ function CautionFields({ caution, onRemove }: { caution: Caution; onRemove: () =
               kind="quiet"
               actions={rest.map((code) => ({
                 id: code,
-                text: t(`wear.${code}`),
+                text: wearName(code),
                 label: (
                   <>
-                    {t(`wear.${code}`)} <span className="graphite num">{code}</span>
+                    {wearName(code)} <span className="graphite num">{code}</span>
                   </>
                 ),
                 onAction: () => set({ wear: [...caution.wear, code] }, `wear.${code}`),

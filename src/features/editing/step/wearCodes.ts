@@ -2,7 +2,6 @@
 export const WEAR_CODES = [
   'M003',
   'M004',
-  'M007',
   'M008',
   'M009',
   'M010',
