@@ -73,7 +73,15 @@ export function permit<Action extends GuideAction>(
   action: Action,
   guideId: string,
 ): Permitted<Action> {
-  const person = signedIn(req)
+  return permitPerson(signedIn(req), action, guideId)
+}
+
+/** The same where there is no request: for work that is done in somebody's name. */
+export function permitPerson<Action extends GuideAction>(
+  person: SignedIn,
+  action: Action,
+  guideId: string,
+): Permitted<Action> {
   if (!mayOnGuide(person, action, guideId)) {
     throw new Problem(mayOnGuide(person, 'see', guideId) ? 'not-allowed' : 'not-found')
   }

@@ -2,6 +2,7 @@ import { Router } from 'express'
 import type { Auth } from '../auth/auth'
 import type { Context } from '../context'
 import { handleFileJobs } from '../files/handleFileJobs'
+import { handleGuideJobs } from '../guides/handleGuideJobs'
 import { handleMailJobs } from '../mail/handleMailJobs'
 import { accountRoutes } from './accounts/routes'
 import { draftRoutes } from './drafts/routes'
@@ -9,6 +10,7 @@ import { fileRoutes } from './files/routes'
 import { guideRoutes } from './guides/routes'
 import { mailRoutes } from './mail/routes'
 import { peopleRoutes } from './people/routes'
+import { revisionRoutes } from './revisions/routes'
 
 /** The routes of every feature under /api, in one readable list. */
 export function featureRoutes(ctx: Context, auth: Auth): Router {
@@ -19,6 +21,7 @@ export function featureRoutes(ctx: Context, auth: Auth): Router {
   router.use(guideRoutes(ctx))
   router.use(draftRoutes(ctx))
   router.use(fileRoutes(ctx))
+  router.use(revisionRoutes(ctx))
   return router
 }
 
@@ -26,4 +29,5 @@ export function featureRoutes(ctx: Context, auth: Auth): Router {
 export function featureJobs(ctx: Context): void {
   handleMailJobs(ctx)
   handleFileJobs(ctx)
+  handleGuideJobs(ctx)
 }

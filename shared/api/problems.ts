@@ -37,6 +37,10 @@ export const PROBLEMS = {
     status: 409,
     title: 'Nothing has changed since revision {label}, so there is nothing to publish.',
   },
+  'conflicts-open': {
+    status: 409,
+    title: '{count} places that two people changed are not settled yet. Settle them before publishing.',
+  },
   'is-published': {
     status: 409,
     title: 'This guide has been published, and what was published stays. It cannot be removed.',
