@@ -1,10 +1,14 @@
 import { plainText, wordsOf } from './plainText'
 import type { GuideDocument } from './schema'
 
-/** Everything in a guide that somebody could look for, as plain text: for the index of the library's search. */
+/**
+ * The words of a guide for an index of full text, one space between them. Scripts without spaces (Thai, Chinese, Japanese …) are cut
+ * by the language's rules, so that an index that splits at spaces finds their words too. Title and summary are not in it: they have
+ * columns of their own, see `cutWords`.
+ */
 export function searchWords(doc: GuideDocument): string {
   const words = wordsOf(doc)
-  return [
+  const texts = [
     ...doc.sections.flatMap((section) => [
       section.title,
       ...section.steps.flatMap((step) => [
@@ -24,6 +28,34 @@ export function searchWords(doc: GuideDocument): string {
     ...doc.models.map((model) => model.name),
     ...doc.credits.map((credit) => credit.name),
   ]
-    .filter((text) => text !== '')
-    .join('\n')
+  return cutWords(texts.join('\n'), doc.lang)
+}
+
+/** A text cut into its words, one space between them, signs left out. Cost some 10 MB a second; not for every key press. */
+export function cutWords(text: string, lang: string): string {
+  const segmenter = new Intl.Segmenter(lang, { granularity: 'word' })
+  return [...segmenter.segment(text.normalize('NFKC'))]
+    .filter(({ isWordLike }) => isWordLike)
+    .map(({ segment }) => segment)
+    .join(' ')
+}
+
+/** Longer questions than these are cut off: an index need not be asked for a whole page. */
+const MOST_WORDS = 16
+
+/**
+ * What somebody typed, as a query of SQLite's FTS5: every word must be there, the last one may go on. Each word is quoted, so that
+ * nothing typed is taken for an operator or a column. `lang` is the interface's language; it only decides how scripts without spaces
+ * are cut. @returns undefined where nothing was typed that could be looked for.
+ */
+export function searchQuery(typed: string, lang: string): string | undefined {
+  const words = cutWords(typed, lang)
+    .split(' ')
+    .filter((word) => word !== '')
+    .slice(0, MOST_WORDS)
+  if (words.length === 0) return undefined
+  const goesOn = !/\s$/u.test(typed)
+  return words
+    .map((word, index) => `"${word.replaceAll('"', '""')}"${goesOn && index === words.length - 1 ? '*' : ''}`)
+    .join(' ')
 }

@@ -1,5 +1,5 @@
-import type { Caution } from '../schema'
-import { isBlank, onStepOrGuide, stepNumber, type Found, type Look, type Rule } from './rule'
+import type { Caution, Step } from '../schema'
+import { isBlank, onStepOrGuide, stepNumber, type Found, type Look, type Rule, type Values } from './rule'
 
 /** Rules about cautions: a signal word alone protects nobody. */
 export const cautionRules = {
@@ -21,10 +21,13 @@ function hasCautions({ doc, steps }: Look): boolean {
 
 function cautionsWhere(isWrong: (caution: Caution) => boolean, field: string): (look: Look) => Found[] {
   return (look) =>
-    [null, ...look.steps].flatMap((step) =>
+    [null, ...look.steps].flatMap((step): Found[] =>
       (step === null ? look.doc.cautions : step.cautions).filter(isWrong).map(({ id }) => ({
         place: onStepOrGuide(step, id, field),
-        values: step === null ? { context: 'guide' } : { step: stepNumber(look, step) },
+        values: placeValues(look, step),
       })),
     )
 }
+
+const placeValues = (look: Look, step: Step | null): Values =>
+  step === null ? { context: 'guide' } : { step: stepNumber(look, step) }

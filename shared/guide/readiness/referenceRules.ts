@@ -124,7 +124,7 @@ function isWithinItself({ doc }: Look, line: Line): boolean {
   if (line.within === undefined) return false
   const above = new Map(doc.lines.map(({ id, within }) => [id, within]))
   const met = new Set<Id>()
-  for (let at = line.within; at !== undefined && !met.has(at); at = above.get(at)) {
+  for (let at: Id | undefined = line.within; at !== undefined && !met.has(at); at = above.get(at)) {
     if (at === line.id) return true
     met.add(at)
   }
@@ -173,7 +173,7 @@ function conditionsGone(look: Look): Found[] {
     .filter(({ when }) =>
       when?.some(({ line, is }) => !targets.line.has(line) || is.some((id) => !options.get(line)?.has(id))),
     )
-    .map(({ place }) => {
+    .map(({ place }): Found => {
       if (place.step !== null) return { place, values: { context: 'step', step: numbers.step[place.step]! } }
       const line = place.page === 'parts' ? doc.lines.find(({ id }) => id === place.node) : undefined
       return line === undefined
