@@ -95,3 +95,8 @@ export function insertUser(
     })
     .run()
 }
+
+/** Whether anybody has an account yet, confirmed or not. */
+export function hasPeople(tx: Tx): boolean {
+  return tx.select({ id: users.id }).from(users).limit(1).get() !== undefined
+}

@@ -46,7 +46,8 @@ export function abilityFor(person: Person | null): Ability {
       can('see', 'Guide')
     }
   }
-  return build()
+  // CASL takes `manage` for every action unless told otherwise; here it is what the owner does with a guide's people.
+  return build({ anyAction: 'every action' })
 }
 
 /** Whether a person may do this to this guide. */

@@ -21,8 +21,9 @@ const MAY: Record<GuideAction, readonly Who[]> = {
   edit: ['guide owner', 'guide author'],
   publish: ['guide owner'],
   manage: ['guide owner'],
-  review: ['reviewer', 'guide owner', 'guide reviewer'],
-  translate: ['guide owner', 'guide translator'],
+  review: ['reviewer', 'guide reviewer'],
+  translate: ['guide translator'],
+  leave: ['guide owner', 'guide author', 'guide translator', 'guide reviewer'],
 }
 
 /** A request for each action, and what it answers to somebody who may. */
