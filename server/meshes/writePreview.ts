@@ -28,9 +28,12 @@ const TRIANGLE_BYTES = 3.7
 /** More triangles than this show no more on a screen, and cost a phone its time. */
 const MOST_TRIANGLES = 100_000
 const TRIES = 4
+/** Steps along an axis: 2 to this power. The coarser ones, a fortieth of a per cent of the box, only where bytes are short. */
+const FINE_BITS = 14
+const COARSE_BITS = 12
 
 /**
- * Makes the preview of a welded mesh: simplified as far as the error allows, quantised to 14 bits, compressed. Normals are left
+ * Makes the preview of a welded mesh: simplified as far as the error allows, quantised, compressed. Normals are left
  * out: the viewer makes them, sharp at creases. The result is read back before its deviation is measured, so that what is
  * reported is what a reader gets. Large meshes aim at 1.5 % of the STL's bytes; where the error does not allow it, the error wins.
  */
@@ -42,10 +45,11 @@ export async function writePreview(original: Mesh): Promise<Preview> {
   const large = triangles > SMALL
   let target = large ? Math.min(budget / TRIANGLE_BYTES, MOST_TRIANGLES) : 0
   let error = (large ? ASKED_ERROR : SMALL_ERROR) * diagonal
+  let bits = FINE_BITS
   let kept: Preview | undefined
   for (let attempt = 0; attempt < TRIES; attempt++) {
     const mesh = simplify(original, target, error)
-    const glb = await encode(mesh)
+    const glb = await encode(mesh, bits)
     const decoded = await decode(glb)
     const errorRatio = deviation(original, decoded) / diagonal
     const good = errorRatio <= MOST_ERROR
@@ -53,11 +57,15 @@ export async function writePreview(original: Mesh): Promise<Preview> {
       kept = { glb, mesh: decoded, errorRatio }
     if (good && (!large || glb.length <= budget)) break
     if (!good && kept !== undefined) break
-    if (good) target *= (budget / glb.length) * 0.95
-    else error *= (MOST_ERROR / errorRatio) * 0.7
+    if (good) {
+      // Too large still: coarser steps, fewer triangles, and a part of the error that is left.
+      bits = COARSE_BITS
+      target *= Math.min(1, (budget / glb.length) * 1.05)
+      error *= 1 + (MOST_ERROR / errorRatio - 1) * 0.4
+    } else error *= (MOST_ERROR / errorRatio) * 0.7
   }
   if (kept !== undefined) return kept
-  const glb = await encode(original)
+  const glb = await encode(original, FINE_BITS)
   const mesh = await decode(glb)
   return { glb, mesh, errorRatio: deviation(original, mesh) / diagonal }
 }
@@ -82,7 +90,7 @@ function newIo(): NodeIO {
     .registerDependencies({ 'meshopt.encoder': MeshoptEncoder, 'meshopt.decoder': MeshoptDecoder })
 }
 
-async function encode({ positions, faces }: Mesh): Promise<Uint8Array> {
+async function encode({ positions, faces }: Mesh, bits: number): Promise<Uint8Array> {
   const document = new Document().setLogger(new Logger(Logger.Verbosity.SILENT))
   const buffer = document.createBuffer()
   const place = document
@@ -101,7 +109,7 @@ async function encode({ positions, faces }: Mesh): Promise<Uint8Array> {
     .addChild(document.createNode().setMesh(document.createMesh().addPrimitive(primitive)))
   await document.transform(
     reorder({ encoder: MeshoptEncoder, target: 'size' }),
-    quantize({ quantizePosition: 14 }),
+    quantize({ quantizePosition: bits }),
   )
   document.createExtension(EXTMeshoptCompression).setRequired(true).setEncoderOptions({
     method: EXTMeshoptCompression.EncoderMethod.FILTER,

@@ -100,8 +100,8 @@ export function Stage({ model, ink, label, describedBy, onReady, onLost }: Stage
 
   return (
     <>
-      <hemisphereLight args={[0xffffff, 0x9a9a9a, 2.2]} position={[0, 0, 1]} />
-      <directionalLight ref={light} intensity={1} />
+      <hemisphereLight args={[0xffffff, 0xb0b0b0, 3]} position={[0, 0, 1]} />
+      <directionalLight ref={light} intensity={1.2} />
       <mesh geometry={model.surface}>
         <meshLambertMaterial color={ink.stone} polygonOffset polygonOffsetFactor={1} polygonOffsetUnits={1} />
       </mesh>

@@ -6,6 +6,9 @@ const SAMPLE = 16
 const SMALLEST = 1e-20
 const LARGEST = 1e12
 
+/** More facets make a file of 7.5 GB. Any four letters of a text, read as a number, are more. */
+const MOST_PROMISED = 0x09090909
+
 /** Facets that the header of a binary STL promises. `bytes` has at least the header's length. */
 export function promisedFacets(bytes: Uint8Array): number {
   return new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength).getUint32(80, true)
@@ -22,6 +25,7 @@ export function readBinaryStl(bytes: Uint8Array, limit: number): StlOutcome {
   const present = Math.floor((bytes.length - STL_HEADER_BYTES) / STL_FACET_BYTES)
   if (promised === 0) return { ok: false, why: bytes.length === STL_HEADER_BYTES ? 'no-facets' : 'not-stl' }
   const whole = present === promised && bytes.length === STL_HEADER_BYTES + promised * STL_FACET_BYTES
+  if (promised > MOST_PROMISED) return { ok: false, why: 'not-stl' }
   if (!whole && !isPlausible(bytes, Math.min(present, promised))) return { ok: false, why: 'not-stl' }
   if (present < promised) return { ok: false, why: 'truncated', promised, present }
   if (promised > limit) return { ok: false, why: 'too-many', facets: promised, limit }
