@@ -16,7 +16,15 @@ export function createApp(ctx: Context, pages: Pages): Express {
   app.disable('x-powered-by')
   app.set('trust proxy', 'loopback')
   app.use(
-    pinoHttp({ logger: ctx.log, autoLogging: { ignore: (req) => !(req.url ?? '').startsWith('/api/') } }),
+    pinoHttp({
+      logger: ctx.log,
+      autoLogging: { ignore: (req) => !(req.url ?? '').startsWith('/api/') },
+      // No headers: the cookies in them open accounts.
+      serializers: {
+        req: ({ id, method, url }: { id: unknown; method: string; url: string }) => ({ id, method, url }),
+        res: ({ statusCode }: { statusCode: number }) => ({ statusCode }),
+      },
+    }),
   )
   app.use(
     helmet({

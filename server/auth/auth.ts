@@ -116,7 +116,7 @@ export function createAuth(ctx: Context) {
       useSecureCookies: config.appUrl.startsWith('https:'),
       defaultCookieAttributes: { httpOnly: true, sameSite: 'lax' },
       // Set by auth/headersOf from the connection, never taken over from the client.
-      ipAddress: { ipAddressHeaders: ['x-quern-address'] },
+      ipAddress: { ipAddressHeaders: ['x-quern-address'], ipv6Subnet: 128 },
       database: { generateId: () => ctx.newId() },
     },
     user: {

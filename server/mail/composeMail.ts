@@ -85,7 +85,7 @@ function asText(values: MailValues[MailTemplate], language: string, all: typeof 
 }
 
 const dayAndTime = (when: Date, language: string): string =>
-  `${new Intl.DateTimeFormat(language, { dateStyle: 'long', timeStyle: 'short', timeZone: 'UTC' }).format(when)} UTC`
+  `${new Intl.DateTimeFormat(language === 'en' ? 'en-GB' : language, { dateStyle: 'long', timeStyle: 'short', timeZone: 'UTC' }).format(when)} UTC`
 
 function plainText({ hello, before, after }: Paragraphs, said: Said, link: string | undefined): string {
   // First strong isolate … pop directional isolate: a Latin name inside an Arabic sentence keeps its place.

@@ -125,9 +125,9 @@ export const DeleteAccount = z.object({
 })
 export type DeleteAccount = z.infer<typeof DeleteAccount>
 
-/** GET /api/demo/accounts: in demo mode only, else not-found. */
+/** GET /api/demo/accounts: nobody, and no password, outside of demo mode. */
 export const DemoAccounts = z.object({
-  password: z.string(),
+  password: z.string().default(''),
   accounts: z.array(z.object({ name: z.string(), email: z.string(), role: z.enum(SITE_ROLES) })),
 })
 export type DemoAccounts = z.infer<typeof DemoAccounts>

@@ -4,7 +4,7 @@ const BROWSERS: [RegExp, string][] = [
   [/\bOPR\//, 'Opera'],
   [/\bSamsungBrowser\//, 'Samsung Internet'],
   [/\b(Firefox|FxiOS)\//, 'Firefox'],
-  [/\b(Chrome|CriOS|Chromium)\//, 'Chrome'],
+  [/(Chrome|CriOS|Chromium)\//, 'Chrome'],
   [/\bSafari\//, 'Safari'],
 ]
 const SYSTEMS: [RegExp, string][] = [

@@ -18,8 +18,12 @@ export function presentSession(row: SessionRow, current: string): SessionEntry {
     id: row.id,
     current: row.id === current,
     ...deviceOf(row.userAgent),
-    address: row.ipAddress === '' ? null : row.ipAddress,
+    address: row.ipAddress === null || row.ipAddress === '' ? null : shortAddress(row.ipAddress),
     createdAt: row.createdAt.toISOString(),
     usedAt: row.updatedAt.toISOString(),
   }
 }
+
+/** An IPv6 address as people write it (RFC 5952); better-auth keeps all its zeros. */
+const shortAddress = (address: string): string =>
+  address.includes(':') ? new URL(`http://[${address}]`).hostname.slice(1, -1) : address

@@ -8,7 +8,7 @@ import {
   type SignIn,
   type SignUp,
 } from '../../../../shared/api/accounts'
-import { RequestProblem, request } from '../../../lib/request'
+import { request } from '../../../lib/request'
 
 const post = <Schema extends z.ZodType>(path: string, schema: Schema, body: unknown) =>
   request(path, schema, { method: 'POST', body })
@@ -27,16 +27,9 @@ export const askReset = (email: string) => post('/api/passwords/reset', MailAske
 export const resetPassword = (body: { token: string; password: string }) =>
   post('/api/passwords', z.undefined(), body)
 
-/** The demo's accounts; null where the site is no demo. */
+/** The demo's accounts; none where the site is no demo. */
 export const demoAccountsQuery = queryOptions({
   queryKey: ['demo', 'accounts'],
-  queryFn: async ({ signal }) => {
-    try {
-      return await request('/api/demo/accounts', DemoAccounts, { signal })
-    } catch (error) {
-      if (error instanceof RequestProblem && error.kind === 'not-found') return null
-      throw error
-    }
-  },
+  queryFn: ({ signal }) => request('/api/demo/accounts', DemoAccounts, { signal }),
   staleTime: Number.POSITIVE_INFINITY,
 })

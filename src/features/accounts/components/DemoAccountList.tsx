@@ -17,10 +17,12 @@ export function DemoAccountList({ demo, onTake }: { demo: DemoAccounts; onTake: 
             <tr key={email}>
               <td>
                 <span className="name">{name}</span>
-                <small dir="ltr">{email}</small>
+                <small>
+                  <bdi>{email}</bdi>
+                </small>
               </td>
               <td>{t(`people:site.roles.${role}`)}</td>
-              <td className="r">
+              <td className="act">
                 <Button
                   kind="quiet"
                   aria-label={t('signIn.demoTake', { name })}

@@ -12,6 +12,7 @@ import { RadioGroup } from '../../../components/controls/RadioGroup'
 import { Status } from '../../../components/controls/Status'
 import { TextField } from '../../../components/controls/TextField'
 import { RequestProblem } from '../../../lib/request'
+import { localeOf } from '../../../lib/localeOf'
 import { useFieldSentence, useSentence } from '../../../lib/useSentence'
 import { deleteAccount, leavingQuery } from '../api/account'
 import { FormPage } from './FormPage'
@@ -135,7 +136,7 @@ function GuideQuestion(props: {
   const { t, i18n } = useTranslation('accounts')
   const { guide } = props
   if (guide.owners.length > 0) {
-    const names = new Intl.ListFormat(i18n.language).format(guide.owners)
+    const names = new Intl.ListFormat(localeOf(i18n.language)).format(guide.owners)
     return (
       <p>
         <b>{guide.title}</b> {t('leave.staysWith', { names })}

@@ -5,6 +5,7 @@ import type { SessionEntry } from '../../../../shared/api/accounts'
 import { Busy } from '../../../components/controls/Busy'
 import { Button } from '../../../components/controls/Button'
 import { Status } from '../../../components/controls/Status'
+import { localeOf } from '../../../lib/localeOf'
 import { useSentence } from '../../../lib/useSentence'
 import { sessionsQuery, useEndSession } from '../api/sessions'
 
@@ -19,7 +20,7 @@ export function SessionTable() {
     browser !== null && system !== null
       ? t('account.deviceWords', { browser, system })
       : (browser ?? system ?? t('account.unknownDevice'))
-  const when = new Intl.DateTimeFormat(i18n.language, { dateStyle: 'medium', timeStyle: 'short' })
+  const when = new Intl.DateTimeFormat(localeOf(i18n.language), { dateStyle: 'medium', timeStyle: 'short' })
   const close = (id: string | null): void => {
     setEnded(false)
     end.mutate(id, { onSuccess: () => setEnded(true) })
@@ -46,11 +47,15 @@ export function SessionTable() {
             <tr key={session.id}>
               <td>
                 {deviceOf(session)}
-                {session.address !== null && <small dir="ltr">{session.address}</small>}
+                {session.address !== null && (
+                  <small>
+                    <bdi>{session.address}</bdi>
+                  </small>
+                )}
               </td>
               <td data-l={t('account.used')}>{when.format(new Date(session.usedAt))}</td>
               <td data-l={t('account.since')}>{when.format(new Date(session.createdAt))}</td>
-              <td className="r">
+              <td className="act">
                 {session.current ? (
                   <span className="lichen">{t('account.here')}</span>
                 ) : (

@@ -89,7 +89,7 @@ export function SignInPage() {
             {t('signIn.noAccount')} <Link to={withNext('/sign-up', search)}>{t('signIn.signUp')}</Link>
           </p>
         </form>
-        {demo !== undefined && demo !== null && demo.accounts.length > 0 && (
+        {demo !== undefined && demo.accounts.length > 0 && (
           <DemoAccountList
             demo={demo}
             onTake={(email) => {

@@ -7,6 +7,7 @@ import { Busy } from '../../../components/controls/Busy'
 import { Button } from '../../../components/controls/Button'
 import { FormSection } from '../../../components/controls/FormSection'
 import { Status } from '../../../components/controls/Status'
+import { localeOf } from '../../../lib/localeOf'
 import { useSentence } from '../../../lib/useSentence'
 import { mailQuery, useSendAgain } from '../api/mails'
 import { MailStateWord } from './MailStateWord'
@@ -55,7 +56,7 @@ function MailHead({ mail }: { mail: MailDetails }) {
   const { t, i18n } = useTranslation('mail')
   const sentence = useSentence()
   const again = useSendAgain(mail.id)
-  const when = new Intl.DateTimeFormat(i18n.language, { dateStyle: 'long', timeStyle: 'short' })
+  const when = new Intl.DateTimeFormat(localeOf(i18n.language), { dateStyle: 'long', timeStyle: 'short' })
   const rows: [string, string][] = [
     [t('recipient'), mail.recipient],
     [t('written'), when.format(new Date(mail.createdAt))],

@@ -6,6 +6,7 @@ import { Busy } from '../../../components/controls/Busy'
 import { Button } from '../../../components/controls/Button'
 import { EmptyState } from '../../../components/controls/EmptyState'
 import { Status } from '../../../components/controls/Status'
+import { localeOf } from '../../../lib/localeOf'
 import { useSentence } from '../../../lib/useSentence'
 import { mailsQuery } from '../api/mails'
 import { MailStateWord } from './MailStateWord'
@@ -52,7 +53,7 @@ export function MailListPage() {
 
 function MailTable({ mails }: { mails: MailEntry[] }) {
   const { t, i18n } = useTranslation('mail')
-  const when = new Intl.DateTimeFormat(i18n.language, { dateStyle: 'medium', timeStyle: 'short' })
+  const when = new Intl.DateTimeFormat(localeOf(i18n.language), { dateStyle: 'medium', timeStyle: 'short' })
   return (
     <table className="ledger fold">
       <thead>

@@ -47,7 +47,7 @@ function People({ people, ownId }: { people: GuidePeople; ownId: string }) {
   const [leaving, setLeaving] = useState(false)
   return (
     <>
-      <FormSection title={t('person')} wide>
+      <FormSection title={t('people')} wide>
         <MemberTable people={people} ownId={ownId} />
         {people.mayLeave && (
           <div className="actions">

@@ -3,6 +3,7 @@ import { useTranslation } from 'react-i18next'
 import type { InvitationEntry } from '../../../../shared/api/people'
 import { Button } from '../../../components/controls/Button'
 import { Status } from '../../../components/controls/Status'
+import { localeOf } from '../../../lib/localeOf'
 import { useSentence } from '../../../lib/useSentence'
 import { useChangePeople } from '../api/guidePeople'
 import { useRoleWords } from './roleWords'
@@ -13,7 +14,7 @@ export function InvitationTable(props: { guideId: string; invitations: Invitatio
   const roleWords = useRoleWords()
   const change = useChangePeople(props.guideId)
   const [withdrawn, setWithdrawn] = useState(false)
-  const day = new Intl.DateTimeFormat(i18n.language, { dateStyle: 'medium' })
+  const day = new Intl.DateTimeFormat(localeOf(i18n.language), { dateStyle: 'medium' })
   return (
     <>
       <table className="ledger fold">
@@ -38,7 +39,7 @@ export function InvitationTable(props: { guideId: string; invitations: Invitatio
                 {day.format(new Date(invitation.expiresAt))}
                 {invitation.expired && <small className="ochre">{t('expired')}</small>}
               </td>
-              <td className="r">
+              <td className="act">
                 <Button
                   kind="quiet"
                   className="small"

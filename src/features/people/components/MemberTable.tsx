@@ -37,7 +37,11 @@ export function MemberTable({ people, ownId }: { people: GuidePeople; ownId: str
               <td>
                 <span className="name">{person.name}</span>
                 {person.userId === ownId && <span className="graphite"> ({t('you')})</span>}
-                {person.email !== null && <small dir="ltr">{person.email}</small>}
+                {person.email !== null && (
+                  <small>
+                    <bdi>{person.email}</bdi>
+                  </small>
+                )}
               </td>
               <td>
                 {person.roles.map((held) => (
@@ -57,7 +61,7 @@ export function MemberTable({ people, ownId }: { people: GuidePeople; ownId: str
                 ))}
               </td>
               {people.mayManage && (
-                <td className="r">
+                <td className="act">
                   {person.userId !== ownId && (
                     <Button
                       kind="quiet"

@@ -9,6 +9,7 @@ import { EmptyState } from '../../../components/controls/EmptyState'
 import { Select } from '../../../components/controls/Select'
 import { Status } from '../../../components/controls/Status'
 import { TextField } from '../../../components/controls/TextField'
+import { localeOf } from '../../../lib/localeOf'
 import { useSentence } from '../../../lib/useSentence'
 import { sitePeopleQuery, useSetSiteRole } from '../api/sitePeople'
 
@@ -24,7 +25,7 @@ export function SitePeoplePage({ ownId }: { ownId: string }) {
   )
   const setRole = useSetSiteRole()
   const [said, setSaid] = useState<string | null>(null)
-  const day = new Intl.DateTimeFormat(i18n.language, { dateStyle: 'medium' })
+  const day = new Intl.DateTimeFormat(localeOf(i18n.language), { dateStyle: 'medium' })
   const people = data?.pages.flatMap((page) => page.people)
   const roles = SITE_ROLES.map((role) => ({ value: role, label: t(`site.roles.${role}`) }))
   return (
