@@ -48,26 +48,36 @@ function fillFacet(buffer: DepthBuffer, points: Float64Array, part: number, a: n
   const toY = Math.min(buffer.height - 1, Math.floor(Math.max(ay, by, cy) - 0.5))
   const fromX = Math.max(0, Math.ceil(Math.min(ax, bx, cx) - 0.5))
   const toX = Math.min(buffer.width - 1, Math.floor(Math.max(ax, bx, cx) - 0.5))
-  // The three weights change by a constant from one sample to the next; with the sign of the area they are positive inside.
+  // Each weight changes by a constant along a row and is positive inside, so it bounds the row's samples on one side. Facets of
+  // rods and pipes are long slivers: trying each sample of their box took most of the time.
   const sign = area > 0 ? 1 : -1
   const acrossB = (cy - ay) * sign
   const acrossC = -(by - ay) * sign
+  const whole = area * sign
   const { depth, part: parts, width } = buffer
   for (let y = fromY; y <= toY; y++) {
     const px = fromX + 0.5 - ax
     const py = y + 0.5 - ay
-    let weightB = (px * (cy - ay) - py * (cx - ax)) * sign
-    let weightC = ((bx - ax) * py - (by - ay) * px) * sign
-    for (let index = y * width + fromX; index <= y * width + toX; index++) {
-      if (weightB >= 0 && weightC >= 0 && weightB + weightC <= area * sign) {
-        const z = az + (slopeB * weightB + slopeC * weightC) * sign
-        if (z < depth[index]!) {
-          depth[index] = z
-          parts[index] = part
-        }
+    const firstB = (px * (cy - ay) - py * (cx - ax)) * sign
+    const firstC = ((bx - ax) * py - (by - ay) * px) * sign
+    const range = { from: 0, to: toX - fromX }
+    narrow(range, firstB, acrossB)
+    narrow(range, firstC, acrossC)
+    narrow(range, whole - firstB - firstC, -acrossB - acrossC)
+    for (let step = range.from; step <= range.to; step++) {
+      const z = az + (slopeB * (firstB + acrossB * step) + slopeC * (firstC + acrossC * step)) * sign
+      const index = y * width + fromX + step
+      if (z < depth[index]!) {
+        depth[index] = z
+        parts[index] = part
       }
-      weightB += acrossB
-      weightC += acrossC
     }
   }
+}
+
+/** Keeps the steps at which `first + across * step` is not negative. */
+function narrow(range: { from: number; to: number }, first: number, across: number): void {
+  if (across > 0) range.from = Math.max(range.from, Math.ceil(-first / across - 1e-9))
+  else if (across < 0) range.to = Math.min(range.to, Math.floor(-first / across + 1e-9))
+  else if (first < 0) range.to = -1
 }
