@@ -13,6 +13,7 @@ import type { AnalyseOutcome, AnalyseRequest, MadeFile } from './types'
 import { writePreview } from './writePreview'
 
 const MOST_FACETS = 5_000_000
+const DRAWN_AS_IT_IS = 150_000
 const PICTURE = { width: 1200, height: 630 }
 
 /**
@@ -25,8 +26,8 @@ export async function analyseModel(request: AnalyseRequest): Promise<AnalyseOutc
   if (!read.ok) return { ok: false, why: read.why, sentence: sayRefusal(read) }
   const measures = measureMesh(read.mesh)
   const preview = await writePreview(read.mesh)
-  // The preview lies within a pixel of the original, so its lines are the original's.
-  const { drawing, svg } = drawStill(preview.mesh)
+  // A large mesh is drawn from its preview, which lies within a pixel of it; a small one from itself, whose facets lie more evenly.
+  const { drawing, svg } = drawStill(measures.triangles > DRAWN_AS_IT_IS ? preview.mesh : read.mesh)
   const png = await pngOf(drawing, PICTURE.width, PICTURE.height)
   const put = async (
     name: MadeFile['name'],
