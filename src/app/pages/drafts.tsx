@@ -1,4 +1,6 @@
 import { Navigate, Outlet, useMatch, useParams } from 'react-router-dom'
+import { useQuery } from '@tanstack/react-query'
+import { accountQuery } from '../../features/accounts/api/account'
 import { PartsLedger } from '../../features/editing/ledger/PartsLedger'
 import { useDraft } from '../../features/editing/draftStore'
 import { DraftFrame } from '../../features/editing/frame/DraftFrame'
@@ -14,12 +16,14 @@ import { StepPage } from '../../features/editing/step/StepPage'
 /** One draft: the frame stays while the pages in it change, and with it what is unsent. */
 function Draft() {
   const { guideId = '' } = useParams()
+  const { data: account } = useQuery(accountQuery)
   const step = useMatch('/drafts/:guideId/steps/:stepId')
   const publish = useMatch('/drafts/:guideId/publish')
   const preview = useMatch('/drafts/:guideId/preview')
   return (
     <DraftFrame
-      key={guideId}
+      key={`${account?.id} ${guideId}`}
+      personId={account?.id ?? ''}
       guideId={guideId}
       stepId={step?.params.stepId ?? null}
       bare={publish !== null || preview !== null}

@@ -38,9 +38,9 @@ function Findings({ title, tone, list }: FindingsProps) {
   const [all, setAll] = useState(false)
   return (
     <section>
-      <h3>
+      <h2>
         {title} <b className={tone}>{list.length}</b>
-      </h3>
+      </h2>
       <ul>
         {(all ? list : list.slice(0, SHOWN)).map((finding, index) => (
           <FindingRow
@@ -94,9 +94,9 @@ function InOrder() {
   if (inOrder.length === 0) return null
   return (
     <section>
-      <h3>
+      <h2>
         {t('findings.inOrderTitle')} <b className="lichen">{inOrder.length}</b>
-      </h3>
+      </h2>
       <ul>
         {(all ? inOrder : inOrder.slice(0, 3)).map((rule) => (
           <li key={rule}>

@@ -3,6 +3,7 @@ import type { Id } from '../../../../shared/lib/ids/id'
 import { useDraft } from '../draftStore'
 import { stepsOf } from '../../../../shared/guide/stepsOf'
 import { FindingList } from './FindingList'
+import { localeOf } from '../../../lib/localeOf'
 
 /** Beside the page that is edited: what must and should be mended in the whole guide, and this step in short. */
 export function ReadinessPanel({ stepId }: { stepId: Id | null }) {
@@ -32,7 +33,9 @@ function ThisStep({ stepId }: { stepId: Id }) {
           : t('step.timeAndPeople', { minutes: t('step.minutesCount', { count: step.minutes }), people })}
       </p>
       {tools.length > 0 && (
-        <p dir="auto">{t('step.toolsAre', { tools: new Intl.ListFormat(i18n.language).format(tools) })}</p>
+        <p dir="auto">
+          {t('step.toolsAre', { tools: new Intl.ListFormat(localeOf(i18n.language)).format(tools) })}
+        </p>
       )}
     </>
   )

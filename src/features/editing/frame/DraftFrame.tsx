@@ -29,6 +29,8 @@ const AS_DESIGNED: Choices = {}
 
 export interface DraftFrameProps {
   guideId: string
+  /** Who is signed in: what is kept on this device is that person's alone. */
+  personId: string
   /** The step that is open; null on the other pages. */
   stepId: Id | null
   /** Without outline and readiness beside it: the preview and the publish page. */
@@ -37,10 +39,10 @@ export interface DraftFrameProps {
 }
 
 /** Opens a draft and puts the head line, the outline and the readiness list round the page that is edited. */
-export function DraftFrame({ guideId, ...rest }: DraftFrameProps) {
+export function DraftFrame({ guideId, personId, ...rest }: DraftFrameProps) {
   const { t } = useTranslation('editing')
   const sentence = useSentence()
-  const { session, view } = useDraftState(guideId)
+  const { session, view } = useDraftState(personId, guideId)
   if (view.is === 'failed') {
     const signIn = view.error instanceof RequestProblem && view.error.kind === 'not-signed-in'
     return (
@@ -49,7 +51,7 @@ export function DraftFrame({ guideId, ...rest }: DraftFrameProps) {
         <p className="mt-4">{sentence(view.error)}</p>
         <p className="actions mt-6">
           {signIn ? (
-            <a className="button go" href={`/sign-in?to=${encodeURIComponent(location.pathname)}`}>
+            <a className="button go" href={`/sign-in?next=${encodeURIComponent(location.pathname)}`}>
               {t('save.signIn')}
             </a>
           ) : (
@@ -76,7 +78,7 @@ function OpenFrame({
   stepId,
   bare = false,
   children,
-}: DraftFrameProps & { session: DraftSession; view: DraftView }) {
+}: Omit<DraftFrameProps, 'personId'> & { session: DraftSession; view: DraftView }) {
   const { t } = useTranslation('editing')
   const [said, setSaid] = useState<Said | null>(null)
   const announce = useCallback((words: string) => setSaid({ words, undo: false }), [])

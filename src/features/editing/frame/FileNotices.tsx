@@ -4,6 +4,7 @@ import { Button } from '../../../components/controls/Button'
 import { Status } from '../../../components/controls/Status'
 import { useSentence } from '../../../lib/useSentence'
 import { useOpenDraft } from './sessionContext'
+import { localeOf } from '../../../lib/localeOf'
 
 /** Files on their way, and those that were not taken, each with its reason. */
 export function FileNotices() {
@@ -45,7 +46,7 @@ function Why({ of }: { of: string | Error }) {
 function Progress({ names, share }: { names: readonly string[]; share: number }) {
   const { t, i18n } = useTranslation('editing')
   const id = useId()
-  const percent = new Intl.NumberFormat(i18n.language, { style: 'percent' }).format(share)
+  const percent = new Intl.NumberFormat(localeOf(i18n.language), { style: 'percent' }).format(share)
   return (
     <div className="draft-notice">
       <p className="note" id={id}>
@@ -53,7 +54,7 @@ function Progress({ names, share }: { names: readonly string[]; share: number })
           ? t('files.sendingOne', { name: names[0], percent })
           : t('files.sending', { count: names.length, percent })}
       </p>
-      <progress className="progress" value={share} max={1} aria-labelledby={id} />
+      <progress className="file-progress" value={share} max={1} aria-labelledby={id} />
     </div>
   )
 }

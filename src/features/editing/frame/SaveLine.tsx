@@ -4,6 +4,7 @@ import { useSentence } from '../../../lib/useSentence'
 import { useDraft } from '../draftStore'
 import type { DraftView } from '../state/draftSession'
 import { useOpenDraft } from './sessionContext'
+import { localeOf } from '../../../lib/localeOf'
 
 /** How the draft stands: kept when, on its way, not sent and why; and who else is here. */
 export function SaveLine() {
@@ -32,7 +33,9 @@ export function SaveLine() {
           </>
         )}
       </span>
-      {others.length > 0 && <>{t('save.then') + new Intl.ListFormat(i18n.language).format(others)}</>}
+      {others.length > 0 && (
+        <>{t('save.then') + new Intl.ListFormat(localeOf(i18n.language)).format(others)}</>
+      )}
       <span className="visually-hidden" role="status">
         {spoken}
       </span>
@@ -47,7 +50,7 @@ function useSaveWords({ save, keptHere }: DraftView): { words: string; trouble: 
   switch (save.is) {
     case 'kept':
       return {
-        words: save.at === null ? t('save.keptNow') : keptAt(save.at, i18n.language, t),
+        words: save.at === null ? t('save.keptNow') : keptAt(save.at, localeOf(i18n.language), t),
         trouble: false,
       }
     case 'changed':

@@ -14,6 +14,7 @@ import '../editing.css'
 import { draftAddress } from '../frame/addresses'
 import { usePageTitle } from '../frame/usePageTitle'
 import { StartGuideDialog } from './StartGuideDialog'
+import { localeOf } from '../../../lib/localeOf'
 
 /** The guides that a person works on, the last changed first. */
 export function DraftsPage() {
@@ -52,7 +53,7 @@ export function DraftsPage() {
           <Status kind="trouble">{sentence(pages.error)}</Status>
           <p className="actions">
             {signedOut ? (
-              <a className="button go" href="/sign-in?to=/drafts">
+              <a className="button go" href="/sign-in?next=/drafts">
                 {t('save.signIn')}
               </a>
             ) : (
@@ -77,10 +78,10 @@ export function DraftsPage() {
 
 function Guides({ guides }: { guides: readonly GuideEntry[] }) {
   const { t, i18n } = useTranslation('editing')
-  const when = new Intl.DateTimeFormat(i18n.language, { dateStyle: 'medium', timeStyle: 'short' })
-  const day = new Intl.DateTimeFormat(i18n.language, { dateStyle: 'medium' })
+  const when = new Intl.DateTimeFormat(localeOf(i18n.language), { dateStyle: 'medium', timeStyle: 'short' })
+  const day = new Intl.DateTimeFormat(localeOf(i18n.language), { dateStyle: 'medium' })
   const roles = (entry: GuideEntry): string =>
-    new Intl.ListFormat(i18n.language).format(entry.roles.map((role) => t(`role.${role}`)))
+    new Intl.ListFormat(localeOf(i18n.language)).format(entry.roles.map((role) => t(`role.${role}`)))
   return (
     <table className="ledger fold drafts-ledger">
       <thead>

@@ -91,7 +91,7 @@ function PublishForm({ last, onPublished }: PublishFormProps) {
   return (
     <form className="stack mt-6" onSubmit={form.submit} noValidate data-own-undo>
       <ErrorSummary {...form.summary} />
-      <dl className="facts">
+      <dl className="draft-facts">
         <dt>{t('front.licence')}</dt>
         <dd>
           {document.licence === '' ? (
@@ -140,7 +140,7 @@ function Published({ revision, onAgain }: { revision: RevisionEntry; onAgain: ()
       <div className="publish-form stack" role="status">
         <h1 className="t4">{t('publish.done', { label: revision.label })}</h1>
         <p>{t('publish.doneHint')}</p>
-        <dl className="facts">
+        <dl className="draft-facts">
           <dt>{t('publish.latestAddress')}</dt>
           <dd>
             <a href={`/guides/${view.guide.slug}`}>/guides/{view.guide.slug}</a>

@@ -11,7 +11,7 @@ const Kept = z.object({
   at: z.number(),
 })
 
-/** Unsent changes of one open page. Each page (tab) keeps its own, and the next page takes up what a closed one left. */
+/** Unsent changes of one person's open page. Each page (tab) keeps its own, and the next page takes up what a closed one left. */
 export interface KeptDrafts {
   keep: (changes: KeptChanges) => Promise<void>
   /** The site has everything. */
@@ -27,8 +27,8 @@ export interface KeptDrafts {
  * Whether a page is still open is told by a lock that it holds for as long as it lives. Where the browser has no locks (a site
  * without https) every kept change is taken up: sending one twice changes nothing.
  */
-export function keptDrafts(guideId: string, pageId: string): KeptDrafts {
-  const prefix = `draft/${guideId}/`
+export function keptDrafts(personId: string, guideId: string, pageId: string): KeptDrafts {
+  const prefix = `draft/${personId}/${guideId}/`
   const own = prefix + pageId
   let release: () => void = () => undefined
   return {

@@ -13,8 +13,11 @@ import { newId } from './newId'
  * Opens a guide's draft for as long as the page shows it, and saves it when the page goes. For another guide the caller must be another
  * component (by its key).
  */
-export function useDraftState(guideId: string): { session: DraftSession; view: SessionView } {
-  const [session] = useState(() => new DraftSession(outsideOf(guideId)))
+export function useDraftState(
+  personId: string,
+  guideId: string,
+): { session: DraftSession; view: SessionView } {
+  const [session] = useState(() => new DraftSession(outsideOf(personId, guideId)))
   useEffect(() => {
     void session.open()
     const stop = listen(session)
@@ -27,7 +30,7 @@ export function useDraftState(guideId: string): { session: DraftSession; view: S
   return { session, view }
 }
 
-const outsideOf = (guideId: string): Outside => ({
+const outsideOf = (personId: string, guideId: string): Outside => ({
   fetchDraft: () => fetchDraft(guideId),
   saveDraft: (document, version) => saveDraft(guideId, document, version),
   saveWhileClosing: (document, version) => saveWhileClosing(guideId, document, version),
@@ -35,7 +38,7 @@ const outsideOf = (guideId: string): Outside => ({
   settleConflict: (id, keep) => settleConflict(guideId, id, keep),
   sendFiles,
   fetchFiles,
-  kept: keptDrafts(guideId, newId()),
+  kept: keptDrafts(personId, guideId, newId()),
   now: Date.now,
 })
 

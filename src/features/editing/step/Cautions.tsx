@@ -5,6 +5,7 @@ import { SignalWord, type Caution } from '../../../../shared/guide/schema'
 import type { Id } from '../../../../shared/lib/ids/id'
 import { Button } from '../../../components/controls/Button'
 import { Menu } from '../../../components/controls/Menu'
+import { WearMark } from '../../../components/reading/WearMark'
 import { useDraft } from '../draftStore'
 import { GuideText } from '../fields/GuideText'
 import { focusPlace } from '../frame/useGoToPlace'
@@ -113,6 +114,7 @@ function CautionFields({ caution, onRemove }: { caution: Caution; onRemove: () =
           <ul className="wear">
             {caution.wear.map((code) => (
               <li key={code}>
+                <WearMark code={code} />
                 <span>{wearName(code)}</span> <span className="graphite num">{code}</span>
                 {!readOnly && (
                   <button

@@ -11,6 +11,7 @@ import { GuideText } from '../fields/GuideText'
 import { useDraft } from '../draftStore'
 import { focusPlace } from '../frame/useGoToPlace'
 import { useOpenDraft } from '../frame/sessionContext'
+import { localeOf } from '../../../lib/localeOf'
 
 /** The printable or cuttable solids that a step needs: out of the guide's, or brought in as STL. */
 export function StepModels({ step }: { step: Step }) {
@@ -159,7 +160,7 @@ function ModelFacts({ file, unit }: { file: FileEntry | undefined; unit: string 
   if (file.state === 'working') return <p className="note">{t('model.working')}</p>
   if (file.state === 'failed') return <p className="note oxide">{file.trouble ?? t('model.failed')}</p>
   if (file.model === null) return null
-  const number = new Intl.NumberFormat(i18n.language, { maximumFractionDigits: 1 })
+  const number = new Intl.NumberFormat(localeOf(i18n.language), { maximumFractionDigits: 1 })
   const { x, y, z } = file.model.box
   return (
     <p className="note num">
