@@ -1,8 +1,23 @@
 import { useTranslation } from 'react-i18next'
 
-/** The line at the head of every page: mark, places, and who is signed in. */
+/** The line at the head of every page: mark, places, and who is signed in. On a phone the places fold into a menu without script. */
 export function RunningHead({ current }: { current?: 'library' | 'drafts' }) {
-  const { t } = useTranslation()
+  const { t } = useTranslation('shell')
+  const places = (
+    <>
+      <a href="/guides" aria-current={current === 'library' ? 'page' : undefined}>
+        {t('library')}
+      </a>
+      <a href="/drafts" aria-current={current === 'drafts' ? 'page' : undefined}>
+        {t('drafts')}
+      </a>
+    </>
+  )
+  const account = (
+    <a href="/sign-in" data-account>
+      {t('signIn')}
+    </a>
+  )
   return (
     <header className="running-head">
       <div className="sheet">
@@ -13,19 +28,15 @@ export function RunningHead({ current }: { current?: 'library' | 'drafts' }) {
           </svg>
           {t('name')}
         </a>
-        <nav>
-          <a href="/guides" aria-current={current === 'library' ? 'page' : undefined}>
-            {t('library')}
-          </a>
-          <a href="/drafts" aria-current={current === 'drafts' ? 'page' : undefined}>
-            {t('drafts')}
-          </a>
-        </nav>
-        <div className="here">
-          <a href="/sign-in" data-account>
-            {t('signIn')}
-          </a>
-        </div>
+        <nav aria-label={t('places')}>{places}</nav>
+        <div className="here">{account}</div>
+        <details className="menu">
+          <summary className="button">{t('menu')}</summary>
+          <nav aria-label={t('menu')}>
+            {places}
+            {account}
+          </nav>
+        </details>
       </div>
     </header>
   )

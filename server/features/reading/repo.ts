@@ -1,0 +1,114 @@
+import { and, count, desc, eq, max, sql, type SQL } from 'drizzle-orm'
+import type { LibraryQuestion } from '../../../shared/api/pages'
+import { searchQuery } from '../../../shared/lib/text/words'
+import type { Db } from '../../db/open'
+import { documents, guides, revisions } from '../../db/schema'
+
+export type GuideRow = typeof guides.$inferSelect
+export type RevisionRow = typeof revisions.$inferSelect
+
+export const PAGE_SIZE = 20
+
+export function guideBySlug(db: Db, slug: string): GuideRow | undefined {
+  return db.select().from(guides).where(eq(guides.slug, slug)).get()
+}
+
+/** Newest first. A guide's whole history is short. */
+export function revisionsOf(db: Db, guideId: string): RevisionRow[] {
+  return db
+    .select()
+    .from(revisions)
+    .where(eq(revisions.guideId, guideId))
+    .orderBy(desc(revisions.number))
+    .all()
+}
+
+export function documentJson(db: Db, hash: string): string {
+  const row = db.select({ json: documents.json }).from(documents).where(eq(documents.hash, hash)).get()
+  if (row === undefined) throw new Error(`The document ${hash} is missing.`)
+  return row.json
+}
+
+/** Rises with every revision: what was rendered before is thrown away when it differs. */
+export function revisionMark(db: Db): number {
+  return db.get<{ mark: number | null }>(sql`select max(rowid) as mark from revision`)?.mark ?? 0
+}
+
+const latest = sql`${revisions.number} = (select max(r.number) from revision r where r.guide_id = ${revisions.guideId})`
+const machine = sql<string>`json_extract(${documents.json}, '$.machine')`
+const language = sql<string>`json_extract(${documents.json}, '$.lang')`
+const title = sql<string>`json_extract(${documents.json}, '$.title')`
+
+function asked(question: LibraryQuestion): SQL | undefined {
+  const query = searchQuery(question.q)
+  return and(
+    latest,
+    query === ''
+      ? undefined
+      : sql`${guides.id} in (select guide_id from guide_search where guide_search match ${query})`,
+    question.machine === '' ? undefined : eq(machine, question.machine),
+    question.language === '' ? undefined : eq(language, question.language),
+  )
+}
+
+/** The guides that answer a question, as their latest revision has them, a page at a time. */
+export function libraryPage(db: Db, question: LibraryQuestion) {
+  return db
+    .select({ guide: guides, revision: revisions, json: documents.json })
+    .from(revisions)
+    .innerJoin(guides, eq(guides.id, revisions.guideId))
+    .innerJoin(documents, eq(documents.hash, revisions.documentHash))
+    .where(asked(question))
+    .orderBy(
+      question.sort === 'title' ? sql`${title} collate nocase` : desc(revisions.publishedAt),
+      guides.id,
+    )
+    .limit(PAGE_SIZE)
+    .offset((question.page - 1) * PAGE_SIZE)
+    .all()
+}
+
+export function libraryTotal(db: Db, question: LibraryQuestion): number {
+  return libraryRows(db, question, sql`1`)[0]?.count ?? 0
+}
+
+/** How many guides there are of each kind of machine, and in each language, among those that answer the rest of the question. */
+export function facetOf(db: Db, question: LibraryQuestion, facet: 'machine' | 'language') {
+  const rest = { ...question, [facet]: '' }
+  return libraryRows(db, rest, facet === 'machine' ? machine : language)
+}
+
+function libraryRows(db: Db, question: LibraryQuestion, by: SQL) {
+  return db
+    .select({ value: sql<string>`${by}`, count: count() })
+    .from(revisions)
+    .innerJoin(guides, eq(guides.id, revisions.guideId))
+    .innerJoin(documents, eq(documents.hash, revisions.documentHash))
+    .where(asked(question))
+    .groupBy(by)
+    .orderBy(desc(count()))
+    .all()
+}
+
+/** The newest revisions of the library or of one guide, for feeds. */
+export function newestRevisions(db: Db, guideId: string | undefined, limit: number) {
+  return db
+    .select({ guide: guides, revision: revisions, title })
+    .from(revisions)
+    .innerJoin(guides, eq(guides.id, revisions.guideId))
+    .innerJoin(documents, eq(documents.hash, revisions.documentHash))
+    .where(guideId === undefined ? undefined : eq(revisions.guideId, guideId))
+    .orderBy(desc(revisions.publishedAt))
+    .limit(limit)
+    .all()
+}
+
+/** Every published guide with the time of its latest revision and its number of steps, for the sitemap. */
+export function allSlugs(db: Db) {
+  return db
+    .select({ slug: guides.slug, at: max(revisions.publishedAt) })
+    .from(revisions)
+    .innerJoin(guides, eq(guides.id, revisions.guideId))
+    .groupBy(guides.slug)
+    .all()
+}
