@@ -90,8 +90,11 @@ function problems(ctx: Context): ErrorRequestHandler {
 
 function asProblem(error: unknown): Problem {
   if (error instanceof Problem) return error
-  if (hasField(error, 'code', 'ENOSPC') || hasField(error, 'code', 'SQLITE_FULL')) {
-    return new Problem('no-space', {}, [], { cause: error })
+  // Drizzle wraps what SQLite says in some of its own errors.
+  for (let at: unknown = error; at instanceof Error; at = at.cause) {
+    if (hasField(at, 'code', 'ENOSPC') || hasField(at, 'code', 'SQLITE_FULL')) {
+      return new Problem('no-space', {}, [], { cause: error })
+    }
   }
   if (hasField(error, 'type', 'entity.too.large')) {
     return new Problem('too-large', { limit: '20 MB' }, [], { cause: error })

@@ -1,6 +1,7 @@
 import { and, desc, eq, gt, lt, lte, or, sql } from 'drizzle-orm'
 import type { GuideRole } from '../../shared/access/ability'
-import type { GuideDocument } from '../../shared/guide/schema'
+import { SCHEMA_VERSION, type GuideDocument } from '../../shared/guide/schema'
+import { readDocument as upgrade } from '../../shared/guide/upgrade'
 import { canonicalJson, hashOf } from '../../shared/lib/json/hash'
 import type { Tx } from '../db/open'
 import { documents, draftStates, drafts, guideMembers, guides, revisions, users } from '../db/schema'
@@ -20,11 +21,18 @@ export function insertDocument(tx: Tx, document: GuideDocument, now: Date): stri
   return hash
 }
 
-/** What is stored was checked by the schema when it came in. @throws Error for a hash that is not stored: a programmer's error. */
+/**
+ * What is stored was checked when it came in; a document of an older version is brought up to this one.
+ * @throws Error for a hash that is not stored, and for a document of a later program: both a fault of the site.
+ */
 export function readDocument(tx: Tx, hash: string): GuideDocument {
   const row = tx.select({ json: documents.json }).from(documents).where(eq(documents.hash, hash)).get()
   if (row === undefined) throw new Error(`There is no document ${hash}`)
-  return JSON.parse(row.json) as GuideDocument
+  const stored = JSON.parse(row.json) as GuideDocument
+  if (stored.schema === SCHEMA_VERSION) return stored
+  const read = upgrade(stored)
+  if (!read.ok) throw new Error(`Document ${hash} cannot be read: ${read.why}`)
+  return read.document
 }
 
 export function readGuide(tx: Tx, guideId: string): GuideRow | undefined {

@@ -1,3 +1,4 @@
+import { rm } from 'node:fs/promises'
 import type { Router } from 'express'
 import type { UploadAnswer } from '../../../../shared/api/files'
 import { permitOnSite } from '../../../auth/person'
@@ -17,13 +18,18 @@ export function bring(router: Router, ctx: Context): void {
       throw new Problem('bad-request', {}, [{ path: ['files'], message: 'Choose a file to bring in.' }])
     }
     const answer: UploadAnswer = { files: [], refused: [] }
-    for (const file of received) {
-      const brought = file.tooLarge
-        ? ({ ok: false, sentence: tooLarge(LARGEST.model) } as const)
-        : await bringFile(ctx, person.id, file)
-      if (!brought.ok) answer.refused.push({ name: file.name, sentence: brought.sentence })
-      else if (!answer.files.some(({ sha256 }) => sha256 === brought.file.sha256))
-        answer.files.push(brought.file)
+    try {
+      for (const file of received) {
+        const brought = file.tooLarge
+          ? ({ ok: false, sentence: tooLarge(LARGEST.model) } as const)
+          : await bringFile(ctx, person.id, file)
+        if (!brought.ok) answer.refused.push({ name: file.name, sentence: brought.sentence })
+        else if (!answer.files.some(({ sha256 }) => sha256 === brought.file.sha256))
+          answer.files.push(brought.file)
+      }
+    } finally {
+      // Where the disk failed at one of them, the ones after it are still there.
+      await Promise.all(received.map((file) => rm(file.path, { force: true })))
     }
     if (answer.files.length === 0) throw allRefused(answer.refused)
     res.json(answer)
