@@ -100,9 +100,12 @@ export function parseMeasure(typed: string, unit: UnitCode = 'each'): ParsedMeas
   const words = plain.replace(ABOUT, '')
   const found = partsOf(words)
   if (found === undefined) return { ok: false, why: 'no number' }
-  const values = found.numbers.map(valueOf)
-  const trouble = values.find((value) => typeof value === 'string')
-  if (trouble !== undefined) return { ok: false, why: trouble }
+  const values: Big[] = []
+  for (const number of found.numbers) {
+    const value = valueOf(number)
+    if (typeof value === 'string') return { ok: false, why: value }
+    values.push(value)
+  }
   if (/\d/.test(found.unit)) {
     // "mm2" ends in a digit and is a unit; "x 500 mm" holds a second number.
     if (unitFor(found.unit) === undefined) return { ok: false, why: 'two numbers' }
