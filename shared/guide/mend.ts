@@ -1,7 +1,9 @@
+import { choicesFor } from './choices'
 import { findNode, setNode } from './edit'
 import type { Finding } from './finding'
+import { holds } from './holds'
 import type { RuleName } from './readiness'
-import { takeFromSteps } from './reconcile'
+import { reconcileLine, usesByLine } from './reconcile'
 import { targetsOf } from './resolve'
 import type { GuideDocument } from './schema'
 import { withoutReferences } from './withoutReferences'
@@ -32,9 +34,18 @@ export function mend(doc: GuideDocument, finding: Finding): GuideDocument | unde
   return mended === doc ? undefined : mended
 }
 
-/** Only under the designer's choices: one quantity cannot be right for two choices that need different ones. */
-function take(doc: GuideDocument, { place, values }: Finding): GuideDocument {
-  return place.node === null || values.context === 'with' ? doc : takeFromSteps(doc, place.node)
+/** Takes what the steps use, if it is the same whatever is chosen: one quantity cannot be right for choices that need different ones. */
+function take(doc: GuideDocument, { place }: Finding): GuideDocument {
+  const line = doc.lines.find(({ id }) => id === place.node)
+  if (line === undefined) return doc
+  const uses = usesByLine(doc).get(line.id) ?? []
+  const conditions = [line.when, ...uses.flatMap(({ step, use }) => [step.when, use.when])]
+  const found = choicesFor(doc, conditions)
+    .filter((choices) => holds(doc, choices, line.when))
+    .map((choices) => reconcileLine(doc, line, uses, choices).used)
+  const used = found[0]
+  if (used === undefined || used === null || found.some((other) => other?.value !== used.value)) return doc
+  return setNode(doc, 'line', line.id, { quantity: used })
 }
 
 function exchangeLimits(doc: GuideDocument, { place }: Finding): GuideDocument {

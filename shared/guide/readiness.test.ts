@@ -349,6 +349,17 @@ test('the list must add up for every choice, and the choice is named', () => {
   expect(mend(twice, finding!)).toBeUndefined()
 })
 
+test('a line that is there only with a substitute is mended by one press, since all its choices agree', () => {
+  const conditional = setNode(setNode(sound, 'step', bolts.id, { when: withCast }), 'line', 'line-bolt-001', {
+    when: withCast,
+    quantity: { value: '5', unit: 'each' },
+  })
+  const [finding] = readiness(conditional, soundFacts())
+  expect(finding).toMatchObject({ rule: 'line-more-used', values: { context: 'with', with: 'Cast wheel' } })
+  const mended = mend(conditional, finding!)!
+  expect(mended.lines[0]!.quantity).toEqual({ value: '8', unit: 'each' })
+})
+
 test('a part under a condition may be used by a step under the same one', () => {
   const both = setNode(inBolts({ when: withCast }), 'line', 'line-bolt-001', { when: withCast })
   expect(readiness(both, soundFacts()).map(({ rule }) => rule)).toEqual([])

@@ -103,7 +103,7 @@ export function sumIn(unit: UnitCode, quantities: readonly Quantity[]): Quantity
  */
 export function takeFromSteps(doc: GuideDocument, lineId: Id, choices: Choices = {}): GuideDocument {
   const line = doc.lines.find(({ id }) => id === lineId)
-  if (line === undefined) return doc
+  if (line === undefined || !holds(doc, choices, line.when)) return doc
   const { used, balance } = reconcileLine(doc, line, usesByLine(doc).get(lineId) ?? [], choices)
   return used === null || balance === 'even' ? doc : setNode(doc, 'line', lineId, { quantity: used })
 }
