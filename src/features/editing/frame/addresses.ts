@@ -6,6 +6,8 @@ export const draftAddress = (guideId: string): string => `/drafts/${guideId}`
 export const stepAddress = (guideId: string, stepId: Id): string => `/drafts/${guideId}/steps/${stepId}`
 export const partsAddress = (guideId: string): string => `/drafts/${guideId}/parts`
 export const guideAddress = (guideId: string): string => `/drafts/${guideId}/guide`
+/** Who works on it: a page of its own, outside of the draft's frame. */
+export const peopleAddress = (guideId: string): string => `/drafts/${guideId}/people`
 export const publishAddress = (guideId: string): string => `/drafts/${guideId}/publish`
 export const previewAddress = (guideId: string): string => `/drafts/${guideId}/preview`
 

@@ -7,7 +7,7 @@ import { emptyStep } from '../../../../shared/guide/emptyDocument'
 import type { Id } from '../../../../shared/lib/ids/id'
 import { Button } from '../../../components/controls/Button'
 import { useDraft } from '../draftStore'
-import { guideAddress, partsAddress, stepAddress } from '../frame/addresses'
+import { guideAddress, partsAddress, peopleAddress, stepAddress } from '../frame/addresses'
 import { focusPlace } from '../frame/useGoToPlace'
 import { useOpenDraft } from '../frame/sessionContext'
 import { FindingMark } from './FindingMark'
@@ -19,7 +19,7 @@ import { useOutlineActs } from './useOutlineActs'
 /** Sections and steps in order: to go to one, and to add, move, copy, rename and remove them. */
 export function Outline({ currentStep }: { currentStep: Id | null }) {
   const { t } = useTranslation('editing')
-  const { guideId, findings } = useOpenDraft()
+  const { guideId, findings, view } = useOpenDraft()
   const { document, edit, newId, readOnly } = useDraft()
   const navigate = useNavigate()
   const { search, key } = useLocation()
@@ -74,6 +74,11 @@ export function Outline({ currentStep }: { currentStep: Id | null }) {
             <NavLink to={partsAddress(guideId)}>{t('place.parts')}</NavLink>
             <FindingMark findings={findings.filter(({ place }) => place.page === 'parts')} />
           </li>
+          {view.guide.roles.includes('owner') && (
+            <li>
+              <NavLink to={peopleAddress(guideId)}>{t('place.people')}</NavLink>
+            </li>
+          )}
         </ul>
         <OutlineDrag onDrop={acts.drop}>
           {document.sections.map((section) => (
