@@ -39,9 +39,10 @@ function WhatFor(props: { invitation: Invitation; token: string; ownEmail: strin
   return (
     <>
       <p>{inviter === null ? t('accept.textAlone', { guide }) : t('accept.text', { inviter, guide })}</p>
-      <p>
-        {t('accept.as', { role: roleWords(invitation) })}: {t(`may.${invitation.role}`)}.
-      </p>
+      <div>
+        <p>{t('accept.as', { role: roleWords(invitation) })}</p>
+        <p className="note">{t(`may.${invitation.role}`)}</p>
+      </div>
       {invitation.state !== 'open' && <Status kind="trouble">{t(`accept.${invitation.state}`)}</Status>}
       {invitation.state === 'open' && ownEmail === null && (
         <SignInFirst token={token} email={invitation.email} />
