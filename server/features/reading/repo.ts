@@ -1,6 +1,6 @@
 import { and, count, desc, eq, max, sql, type SQL } from 'drizzle-orm'
 import type { LibraryQuestion } from '../../../shared/api/pages'
-import { searchQuery } from '../../../shared/lib/text/words'
+import { searchQuery } from '../../../shared/guide/searchWords'
 import type { Db } from '../../db/open'
 import { documents, guides, revisions } from '../../db/schema'
 
@@ -40,10 +40,10 @@ const language = sql<string>`json_extract(${documents.json}, '$.lang')`
 const title = sql<string>`json_extract(${documents.json}, '$.title')`
 
 function asked(question: LibraryQuestion): SQL | undefined {
-  const query = searchQuery(question.q)
+  const query = searchQuery(question.q, question.language === '' ? 'en' : question.language)
   return and(
     latest,
-    query === ''
+    query === undefined
       ? undefined
       : sql`${guides.id} in (select guide_id from guide_search where guide_search match ${query})`,
     question.machine === '' ? undefined : eq(machine, question.machine),
