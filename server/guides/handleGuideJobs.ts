@@ -3,9 +3,13 @@ import { readFiles, type FileRow } from '../files/repo'
 import { fileReferences } from './fileReferences'
 import { readDocument } from './repo'
 import { readRevision } from './revisionRepo'
+import { thinDraft } from './thinDraft'
 
-/** What follows from publishing, after the answer. */
+/** What follows from saving and publishing, after the answer. */
 export function handleGuideJobs(ctx: Context): void {
+  ctx.jobs.handle<{ guideId: string }>('thin-draft', ({ guideId }) =>
+    Promise.resolve(thinDraft(ctx, guideId)),
+  )
   ctx.jobs.handle<{ revisionId: string }>('revision-published', ({ revisionId }) =>
     completeFiles(ctx, revisionId),
   )

@@ -1,6 +1,5 @@
 import type { PublishRevision } from '../../shared/api/revisions'
 import { readiness } from '../../shared/guide/readiness'
-import { cutWords, searchWords } from '../../shared/guide/searchWords'
 import type { Permitted } from '../auth/person'
 import type { Context } from '../context'
 import type { Tx } from '../db/open'
@@ -57,11 +56,7 @@ export function publishRevision(
       insertRevision(tx, revision)
       // Until now nobody outside knew the guide's address: it is taken from the title as it is published, and stays.
       if (latest === undefined) setSlug(tx, guideId, freeSlug(tx, slugOf(document.title), guideId))
-      putSearch(tx, guideId, {
-        title: cutWords(document.title, document.lang),
-        summary: cutWords(document.summary, document.lang),
-        words: searchWords(document),
-      })
+      putSearch(tx, guideId, document)
       ctx.jobs.add(tx, 'revision-published', { revisionId: revision.id })
       return { guide: readGuide(tx, guideId)!, revision }
     },

@@ -1,4 +1,4 @@
-import { and, desc, eq, gt, lt, lte, or, sql } from 'drizzle-orm'
+import { and, desc, eq, gt, lt, lte, max, notInArray, or, sql } from 'drizzle-orm'
 import type { GuideRole } from '../../shared/access/ability'
 import { SCHEMA_VERSION, type GuideDocument } from '../../shared/guide/schema'
 import { readDocument as upgrade } from '../../shared/guide/upgrade'
@@ -178,6 +178,31 @@ export function rolesOn(tx: Tx, guideId: string, userId: string): GuideRole[] {
     .where(and(eq(guideMembers.guideId, guideId), eq(guideMembers.userId, userId)))
     .all()
   return rows.map(({ role }) => role)
+}
+
+/**
+ * Thins a draft's history: of the states saved before a time the last one of each hour stays, and the draft's own.
+ * Documents that nothing else refers to go with the others.
+ */
+export function thinDraftStates(tx: Tx, guideId: string, before: Date): void {
+  const kept = tx
+    .select({ version: max(draftStates.version) })
+    .from(draftStates)
+    .where(eq(draftStates.guideId, guideId))
+    .groupBy(sql`${draftStates.savedAt} / 3600000`)
+  const gone = tx
+    .delete(draftStates)
+    .where(
+      and(
+        eq(draftStates.guideId, guideId),
+        lt(draftStates.savedAt, before),
+        notInArray(draftStates.version, kept),
+        sql`${draftStates.version} <> (select version from draft where guide_id = ${guideId})`,
+      ),
+    )
+    .returning({ hash: draftStates.documentHash })
+    .all()
+  for (const hash of new Set(gone.map((row) => row.hash))) dropDocument(tx, hash)
 }
 
 /** Removes a guide that was never published, its draft with all history, and the documents that nothing else refers to. */

@@ -1,4 +1,6 @@
 import { and, desc, eq, lt, sql } from 'drizzle-orm'
+import type { GuideDocument } from '../../shared/guide/schema'
+import { cutWords, searchWords } from '../../shared/guide/searchWords'
 import type { Tx } from '../db/open'
 import { revisions } from '../db/schema'
 import type { RevisionRow } from './repo'
@@ -39,14 +41,12 @@ export function revisionsOf(
     .all()
 }
 
-/** What is found of a guide is its latest revision. */
-export function putSearch(
-  tx: Tx,
-  guideId: string,
-  found: { title: string; summary: string; words: string },
-): void {
+/** What is found of a guide is its latest revision, cut into words as a question is, so that scripts without spaces are found too. */
+export function putSearch(tx: Tx, guideId: string, document: GuideDocument): void {
+  const title = cutWords(document.title, document.lang)
+  const summary = cutWords(document.summary, document.lang)
   tx.run(sql`delete from guide_search where guide_id = ${guideId}`)
   tx.run(
-    sql`insert into guide_search (guide_id, title, summary, words) values (${guideId}, ${found.title}, ${found.summary}, ${found.words})`,
+    sql`insert into guide_search (guide_id, title, summary, words) values (${guideId}, ${title}, ${summary}, ${searchWords(document)})`,
   )
 }

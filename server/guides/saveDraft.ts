@@ -11,6 +11,7 @@ import { readOpenConflicts } from './conflictRepo'
 import { keepConflicts } from './keepConflicts'
 import { presentConflict } from './presentConflict'
 import { insertDocument, putDraft, readDocument, readDraft, readDraftState, type DraftRow } from './repo'
+import { thinLater } from './thinDraft'
 import { whoChanged } from './whoChanged'
 
 /**
@@ -92,5 +93,6 @@ export function putIfChanged(
     updatedAt: now,
   }
   putDraft(tx, next)
+  thinLater(tx, ctx, draft.guideId)
   return next
 }

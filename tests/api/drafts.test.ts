@@ -370,6 +370,39 @@ describe('two authors', () => {
   })
 })
 
+test('after a day one state an hour is kept, and a save from one that is gone is merged from the one before it', async () => {
+  const { owner, author, id, first } = await start()
+  const versions = (): number[] =>
+    site.ctx.db
+      .select()
+      .from(draftStates)
+      .all()
+      .filter((state) => state.guideId === id)
+      .map((state) => state.version)
+  const hour = 3600_000
+  now = new Date(Math.ceil(now.getTime() / hour) * hour)
+  for (let version = 1; version <= 6; version += 1) {
+    await save(owner, id, stepTitle(first, `Written ${version}`), version)
+    now = new Date(now.getTime() + 20 * 60_000)
+  }
+  const gone = hashOf(stepTitle(first, 'Written 1'))
+  await site.drain()
+  expect(versions()).toEqual([1, 2, 3, 4, 5, 6, 7])
+  now = new Date(now.getTime() + 25 * hour)
+  await site.drain()
+  expect(versions()).toEqual([1, 4, 7])
+  expect(
+    site.ctx.db
+      .select()
+      .from(documents)
+      .all()
+      .some((row) => row.hash === gone),
+  ).toBe(false)
+  const late = await save(author, id, { ...stepTitle(first, 'Written 5'), summary: 'By the author' }, 6)
+  expect(late.document).toMatchObject({ summary: 'By the author' })
+  expect(late.conflicts).toMatchObject([{ field: 'title', mine: 'Written 5', theirs: 'Written 6' }])
+})
+
 describe('guides', () => {
   test('slugs are unique and keep the script', async () => {
     const owner = site.person()
