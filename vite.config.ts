@@ -16,6 +16,7 @@ export default defineConfig({
             app: 'src/app/shell.html',
             reader: 'src/reader/reader.ts',
             readingStyle: 'src/styles/reading.css',
+            readingFonts: 'src/styles/readingFonts.css',
           },
         },
       },

@@ -6,7 +6,6 @@ import { library, people } from '../../fixtures/demo/library'
 import { demoFigures, type DemoFigure } from '../../fixtures/demo/models/demoFigures'
 import { demoParts } from '../../fixtures/demo/models/demoParts'
 import { DEMO_PASSWORD } from '../../shared/access/demoAddress'
-import { searchWords } from '../../shared/guide/searchWords'
 import { GuideDocument } from '../../shared/guide/schema'
 import { addAccount } from '../auth/addAccount'
 import type { Context } from '../context'
@@ -68,11 +67,7 @@ export async function loadDemo(ctx: Context): Promise<void> {
           publishedBy: ownerId,
           publishedAt: at,
         })
-        putSearch(tx, guideId, {
-          title: document.title,
-          summary: document.summary,
-          words: searchWords(document),
-        })
+        putSearch(tx, guideId, document)
       })
       for (const { who, role, language = '' } of guide.others) {
         addMember(tx, { guideId, userId: named(ids, who), role, language, createdAt: ctx.now() })

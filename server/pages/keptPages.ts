@@ -3,10 +3,14 @@ import type { IncomingMessage, OutgoingHttpHeaders, ServerResponse } from 'node:
 import { promisify } from 'node:util'
 import { brotliCompress, constants, gzip } from 'node:zlib'
 
-interface Kept {
+/** A page in every packing, with its etag and all of its headers. */
+export interface PackedPage {
   etag: string
   headers: OutgoingHttpHeaders
   bodies: { identity: Buffer; gzip: Buffer; br: Buffer }
+}
+
+interface Kept extends PackedPage {
   mark: number
   until: number
 }
@@ -18,9 +22,21 @@ const MOST_BYTES = 64 * 1024 * 1024
 const packGzip = promisify(gzip)
 const packBrotli = promisify(brotliCompress)
 
+/** Packs a page. A cookie that was set while it was rendered belongs to the one who asked and is not among its headers. */
+export async function packPage(html: string, headers: OutgoingHttpHeaders): Promise<PackedPage> {
+  const identity = Buffer.from(html)
+  const [zipped, br] = await Promise.all([
+    packGzip(identity, { level: 9 }),
+    packBrotli(identity, { params: { [constants.BROTLI_PARAM_QUALITY]: 9 } }),
+  ])
+  const etag = createHash('sha256').update(identity).digest('base64url').slice(0, 22)
+  const { 'set-cookie': _, ...shared } = headers
+  return { etag, headers: shared, bodies: { identity, gzip: zipped, br } }
+}
+
 /**
  * Rendered pages, packed, with their etag: answered before Express is asked. A page is thrown away when a revision was published since
- * (`mark` differs), after five minutes, or, the longest unused first, when together they grow past 64 MB.
+ * it was read (`mark` differs), after five minutes, or, the longest unused first, when together they grow past 64 MB.
  */
 export class KeptPages {
   private readonly pages = new Map<string, Kept>()
@@ -31,31 +47,19 @@ export class KeptPages {
     private readonly now: () => Date,
   ) {}
 
-  async keep(key: string, html: string, headers: OutgoingHttpHeaders): Promise<Kept> {
-    const identity = Buffer.from(html)
-    const [zipped, br] = await Promise.all([
-      packGzip(identity, { level: 9 }),
-      packBrotli(identity, { params: { [constants.BROTLI_PARAM_QUALITY]: 9 } }),
-    ])
-    const etag = createHash('sha256').update(identity).digest('base64url').slice(0, 22)
-    const kept = {
-      etag,
-      headers,
-      bodies: { identity, gzip: zipped, br },
-      mark: this.mark(),
-      until: this.now().getTime() + KEPT_MS,
-    }
+  /** `mark` is what it was before the page's data were read, so that a revision published meanwhile is not missed. */
+  keep(key: string, page: PackedPage, mark: number): void {
     this.drop(key)
+    const kept = { ...page, mark, until: this.now().getTime() + KEPT_MS }
     this.pages.set(key, kept)
     this.bytes += sizeOf(kept)
     for (const oldest of this.pages.keys()) {
       if (this.bytes <= MOST_BYTES) break
       this.drop(oldest)
     }
-    return kept
   }
 
-  find(key: string): Kept | undefined {
+  find(key: string): PackedPage | undefined {
     const kept = this.pages.get(key)
     if (kept === undefined) return undefined
     if (kept.mark !== this.mark() || kept.until < this.now().getTime()) {
@@ -77,16 +81,21 @@ export class KeptPages {
 
 const sizeOf = ({ bodies }: Kept): number => bodies.identity.length + bodies.gzip.length + bodies.br.length
 
-/** Answers with a kept page: 304 where the reader has it, else the smallest body that the reader can unpack. */
-export function answerKept(req: IncomingMessage, res: ServerResponse, kept: Kept, status = 200): void {
+/** RFC 9110, 12.5.3: a packing is taken when it is named and not refused by a weight of nought. */
+const takes = (accepted: string, packing: string): boolean =>
+  new RegExp(`\\b${packing}\\b(?!\\s*;\\s*q=0(?:\\.0*)?\\s*(?:,|$))`).test(accepted)
+
+/** Answers with a packed page: 304 where the reader has it, else the smallest body that the reader can unpack. */
+export function answerPacked(
+  req: IncomingMessage,
+  res: ServerResponse,
+  page: PackedPage,
+  status = 200,
+): void {
   const accepted = String(req.headers['accept-encoding'] ?? '')
-  const packing = /\bbr\b/.test(accepted) ? 'br' : /\bgzip\b/.test(accepted) ? 'gzip' : 'identity'
-  const etag = `"${kept.etag}-${packing}"`
-  const headers: OutgoingHttpHeaders = {
-    ...kept.headers,
-    etag,
-    'cache-control': 'public, max-age=0, must-revalidate',
-  }
+  const packing = takes(accepted, 'br') ? 'br' : takes(accepted, 'gzip') ? 'gzip' : 'identity'
+  const etag = `"${page.etag}-${packing}"`
+  const headers: OutgoingHttpHeaders = { ...page.headers, etag }
   if (
     String(req.headers['if-none-match'] ?? '')
       .split(/\s*,\s*/)
@@ -95,7 +104,7 @@ export function answerKept(req: IncomingMessage, res: ServerResponse, kept: Kept
     res.writeHead(304, headers).end()
     return
   }
-  const body = kept.bodies[packing]
+  const body = page.bodies[packing]
   if (packing !== 'identity') headers['content-encoding'] = packing
   headers['content-length'] = body.length
   res.writeHead(status, headers)

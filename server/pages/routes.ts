@@ -10,8 +10,8 @@ import { rootDir } from '../db/open'
 import { atomFeed, sitemap } from '../features/reading/feeds'
 import { readGuide } from '../features/reading/readGuide'
 import { Question, readLibrary } from '../features/reading/readLibrary'
-import { revisionMark } from '../features/reading/repo'
-import { answerKept, KeptPages } from './keptPages'
+import { revisionMarker } from '../features/reading/repo'
+import { answerPacked, KeptPages, packPage } from './keptPages'
 import { languageOf } from './languageOf'
 import type { Renderer } from './renderer'
 
@@ -42,27 +42,33 @@ export function pageRoutes(
   renderer: Renderer,
 ): { routes: Router; serveKept: (req: IncomingMessage, res: ServerResponse) => boolean } {
   const routes = Router()
-  const kept = new KeptPages(() => revisionMark(ctx.db), ctx.now)
-  const keyOf = (req: IncomingMessage): string => `${languageOf(req)} ${req.url}`
+  const mark = revisionMarker(ctx.db)
+  const kept = new KeptPages(mark, ctx.now)
 
-  async function send(req: Request, res: Response, data: PageData): Promise<void> {
-    const language = languageOf(req)
+  /** Reads and renders a page, keeps it and answers with it. */
+  async function send(req: Request, res: Response, read: () => PageData): Promise<void> {
+    const before = mark()
+    const data = read()
     const [render, parts] = await Promise.all([renderer.render(), renderer.parts()])
-    const origin = ctx.config.appUrl
-    const html = render({ data, language, origin, path: req.path, ...parts, demo: ctx.config.demo })
+    const { appUrl: origin, demo } = ctx.config
+    const html = render({ data, language: languageOf(req), origin, path: req.path, ...parts, demo })
     res.type('html').vary('Accept-Encoding').vary('Accept-Language').vary('Cookie')
-    const page = await kept.keep(isLasting(data) ? keyOf(req) : '', html, { ...res.getHeaders() })
-    answerKept(req, res, page, data.page === 'missing' ? 404 : 200)
+    res.set('cache-control', cachingOf(data))
+    const page = await packPage(html, { ...res.getHeaders() })
+    if (isLasting(data)) kept.keep(keyOf(req), page, before)
+    answerPacked(req, res, page, data.page === 'missing' ? 404 : 200)
   }
 
   const guidePage = (place: Place) => async (req: Request, res: Response) => {
-    const guide = readGuide(ctx, part(req, 'slug') ?? '', part(req, 'label'))
-    await send(req, res, guide === undefined ? { page: 'missing' } : { page: place, guide })
+    await send(req, res, () => {
+      const guide = readGuide(ctx, part(req, 'slug') ?? '', part(req, 'label'))
+      return guide === undefined ? { page: 'missing' } : { page: place, guide }
+    })
   }
 
   routes.get('/', (_req, res) => res.redirect(302, '/guides'))
   routes.get('/guides', (req, res) =>
-    send(req, res, { page: 'library', library: readLibrary(ctx, Question.parse(req.query)) }),
+    send(req, res, () => ({ page: 'library', library: readLibrary(ctx, Question.parse(req.query)) })),
   )
   for (const base of ['/guides/:slug', '/guides/:slug/revisions/:label']) {
     routes.get(base, guidePage('front'))
@@ -71,14 +77,15 @@ export function pageRoutes(
     routes.get(`${base}/models`, guidePage('models'))
     routes.get(`${base}/revisions`, guidePage('revisions'))
     routes.get(`${base}/steps/:number`, async (req, res) => {
-      const guide = readGuide(ctx, part(req, 'slug') ?? '', part(req, 'label'))
-      const step = Number(part(req, 'number'))
-      const known =
-        guide !== undefined &&
-        Number.isInteger(step) &&
-        step >= 1 &&
-        step <= numbering(resolve(guide.document)).steps
-      await send(req, res, known ? { page: 'step', guide, step } : { page: 'missing' })
+      await send(req, res, () => {
+        const guide = readGuide(ctx, part(req, 'slug') ?? '', part(req, 'label'))
+        const step = part(req, 'number') ?? ''
+        const known =
+          guide !== undefined &&
+          /^[1-9]\d{0,4}$/.test(step) &&
+          Number(step) <= numbering(resolve(guide.document)).steps
+        return known ? { page: 'step', guide, step: Number(step) } : { page: 'missing' }
+      })
     })
   }
   feedRoutes(ctx, routes)
@@ -94,7 +101,7 @@ export function pageRoutes(
       if (req.method !== 'GET' && req.method !== 'HEAD') return false
       const page = kept.find(keyOf(req))
       if (page === undefined) return false
-      answerKept(req, res, page)
+      answerPacked(req, res, page)
       return true
     },
   }
@@ -104,6 +111,24 @@ export function pageRoutes(
     if (data.page === 'missing' || !ctx.config.production) return false
     return data.page === 'library' || data.guide.files.every(({ state }) => state !== 'working')
   }
+}
+
+/** What a page depends on: its path, the language, and for the library what was asked. Anything else in an address is not heard. */
+function keyOf(req: IncomingMessage): string {
+  const [path = '', search] = (req.url ?? '').split('?', 2)
+  const asked =
+    search !== undefined && path === '/guides'
+      ? JSON.stringify(Question.parse(Object.fromEntries(new URLSearchParams(search))))
+      : ''
+  return `${languageOf(req)} ${path} ${asked}`
+}
+
+/**
+ * The text at a revision's own address never changes, but the note above it that a newer one is current must come soon: an hour.
+ * The latest is asked for each time, which costs 304 where nothing is new.
+ */
+function cachingOf(data: PageData): string {
+  return 'guide' in data && data.guide.pinned ? 'public, max-age=3600' : 'public, max-age=0, must-revalidate'
 }
 
 /** The last route of the site: a page that says that there is nothing here. */

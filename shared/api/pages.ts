@@ -68,6 +68,8 @@ export interface PageRequest {
   style: string
   /** Address of the small script. */
   script: string
+  /** Address of the style sheet with the typefaces, which the script asks for when the text stands. */
+  fonts: string
   demo: boolean
 }
 

@@ -6,6 +6,18 @@ import type { ViewerStrings } from '../viewer3d/strings'
 
 document.documentElement.dataset.script = 'on'
 
+/** The typefaces come after everything else, and not at all to a reader who saves data or has a slow line: the text stands without them. */
+const line = (navigator as { connection?: { saveData?: boolean; effectiveType?: string } }).connection
+const fonts = document.getElementById('reader')?.dataset.fonts
+if (fonts !== undefined && line?.saveData !== true && !/2g|3g/.test(line?.effectiveType ?? '')) {
+  addEventListener('load', () => {
+    const sheet = document.createElement('link')
+    sheet.rel = 'stylesheet'
+    sheet.href = fonts
+    document.head.append(sheet)
+  })
+}
+
 const cookie = (name: string): string | undefined => {
   const found = document.cookie.split('; ').find((pair) => pair.startsWith(`${name}=`))
   return found === undefined ? undefined : decodeURIComponent(found.slice(name.length + 1))

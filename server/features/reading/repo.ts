@@ -29,9 +29,13 @@ export function documentJson(db: Db, hash: string): string {
   return row.json
 }
 
-/** Rises with every revision: what was rendered before is thrown away when it differs. */
-export function revisionMark(db: Db): number {
-  return db.get<{ mark: number | null }>(sql`select max(rowid) as mark from revision`)?.mark ?? 0
+/** A number that rises with every revision, cheap to ask for: what was rendered before is thrown away when it differs. */
+export function revisionMarker(db: Db): () => number {
+  const newest = db
+    .select({ mark: sql<number | null>`max(rowid)` })
+    .from(revisions)
+    .prepare()
+  return () => newest.get()?.mark ?? 0
 }
 
 const latest = sql`${revisions.number} = (select max(r.number) from revision r where r.guide_id = ${revisions.guideId})`

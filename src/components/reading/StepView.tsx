@@ -30,8 +30,7 @@ export function StepView({ id, level = 2, eager = false }: { id: Id; level?: 1 |
           {t('section', { letter: numbers.section[section.id] })}
           {section.title !== '' && (
             <>
-              <br />
-              <span {...own}>{section.title}</span>
+              <br /> <span {...own}>{section.title}</span>
             </>
           )}
         </p>

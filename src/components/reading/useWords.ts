@@ -1,4 +1,5 @@
 import { useTranslation } from 'react-i18next'
+import { localeOf } from '../../lib/localeOf'
 import { ownLanguage, useGuide } from './guideView'
 
 /** Sentences of the interface, numbers and dates in its language, and the attributes of the guide's own words. */
@@ -22,7 +23,7 @@ export function useOwnLanguage(): { lang?: string; dir?: 'ltr' | 'rtl' } {
 export function formatNumber(value: string | number, language: string): string {
   const text = String(value)
   const digits = text.split('.')[1]?.length ?? 0
-  return new Intl.NumberFormat(language, {
+  return new Intl.NumberFormat(localeOf(language), {
     numberingSystem: 'latn',
     minimumFractionDigits: digits,
     maximumFractionDigits: digits,
@@ -30,7 +31,7 @@ export function formatNumber(value: string | number, language: string): string {
 }
 
 export function formatDate(iso: string, language: string): string {
-  return new Intl.DateTimeFormat(language, {
+  return new Intl.DateTimeFormat(localeOf(language), {
     day: 'numeric',
     month: 'long',
     year: 'numeric',

@@ -122,7 +122,7 @@ function Before() {
     ),
   ].sort()
   return (
-    <section className="row block">
+    <section className="row chapter">
       <h2 className="margin plain">{t('beforeYouBegin')}</h2>
       <div className="text stack">
         {doc.cautions.map((caution) => (
@@ -143,13 +143,16 @@ function Before() {
 function Needs({ guide }: { guide: GuideData }) {
   const { t } = useWords()
   const own = useOwnLanguage()
-  const { doc } = useGuide()
+  const { doc, whole } = useGuide()
   const steps = stepsOf(doc)
+  // A tool that only steps with a substitute need is not asked for; one that no step names is, without a count.
+  const elsewhere = new Set(stepsOf(whole).flatMap((step) => step.tools))
   const tools = doc.tools
     .map((tool) => ({ tool, count: steps.filter((step) => step.tools.includes(tool.id)).length }))
+    .filter(({ tool, count }) => count > 0 || !elsewhere.has(tool.id))
     .sort((a, b) => b.count - a.count)
   return (
-    <section className="block">
+    <section className="chapter">
       <div className="head">
         <h2>{t('whatYouNeed')}</h2>
         <p className="note">{t('readFromSteps', { count: steps.length })}</p>
@@ -161,7 +164,7 @@ function Needs({ guide }: { guide: GuideData }) {
           <ul className="pairs">
             {tools.map(({ tool, count }) => (
               <li key={tool.id}>
-                <span {...own}>{tool.name}</span> <span>{t('stepCount', { count })}</span>
+                <span {...own}>{tool.name}</span> {count > 0 && <span>{t('stepCount', { count })}</span>}
               </li>
             ))}
           </ul>
@@ -199,7 +202,7 @@ function Contents({ guide }: { guide: GuideData }) {
   const own = useOwnLanguage()
   const { doc, numbers } = useGuide()
   return (
-    <section className="block">
+    <section className="chapter">
       <div className="head">
         <h2>{t('howItIsBuilt')}</h2>
         <p className="note">
@@ -235,7 +238,7 @@ function History({ guide }: { guide: GuideData }) {
   const own = useOwnLanguage()
   const { doc } = useGuide()
   return (
-    <section className="block">
+    <section className="chapter">
       <div className="head">
         <h2>{t('place.revisions')}</h2>
         <p className="note">{t('neverChanges')}</p>

@@ -34,7 +34,7 @@ export function PageDocument({ request }: { request: PageRequest }) {
         <RunningHead current="library" />
         <Page data={data} />
         <Languages path={request.path} />
-        <script type="module" src={script} />
+        <script type="module" src={script} data-fonts={request.fonts} id="reader" />
       </body>
     </html>
   )
