@@ -16,5 +16,4 @@ export const openPicture = (file: string): Sharp =>
   sharp(file, { limitInputPixels: MOST_PIXELS, failOn: 'error', sequentialRead: true }).autoOrient()
 
 /** Reads the head of a picture alone; nothing is decoded, so that any promised size can be looked at. */
-export const headOf = (file: string): Promise<Metadata> =>
-  sharp(file, { limitInputPixels: false }).metadata()
+export const headOf = (file: string): Promise<Metadata> => sharp(file, { limitInputPixels: false }).metadata()
