@@ -90,9 +90,9 @@ module.exports = {
     ),
     forbid(
       'known-packages',
-      {},
+      { pathNot: '/testing/' },
       { dependencyTypes: ['npm-no-pkg', 'npm-unknown', 'npm-dev'], pathNot: '@types/' },
-      'Product code uses dependencies of package.json.',
+      'Product code uses dependencies of package.json. Folders called testing serve tests alone.',
     ),
   ],
   options: {
