@@ -5,6 +5,7 @@ import { NotFound } from './notFound'
 import { PageTrouble } from './pageTrouble'
 import { accountRoutes } from './pages/accountRoutes'
 import { draftRoutes } from './pages/draftRoutes'
+import { importRoutes } from './pages/importRoutes'
 import { Waiting } from './waiting'
 
 /** The application's addresses. Reading pages are documents of their own and are reached by whole loads. */
@@ -14,7 +15,7 @@ export function createRouter(_queryClient: QueryClient) {
       element: <Frame />,
       errorElement: <PageTrouble />,
       hydrateFallbackElement: <Waiting />,
-      children: [...accountRoutes, ...draftRoutes, { path: '*', element: <NotFound /> }],
+      children: [...accountRoutes, ...importRoutes, ...draftRoutes, { path: '*', element: <NotFound /> }],
     },
   ])
 }

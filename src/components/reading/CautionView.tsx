@@ -15,7 +15,7 @@ export function CautionView({ caution }: { caution: Caution }) {
   const own = useOwnLanguage()
   const word = t(`guide:signal.${caution.signal}`)
   return (
-    <aside className={`caution ${SHAPE[caution.signal]}`} aria-label={word}>
+    <div className={`caution ${SHAPE[caution.signal]}`} role="note" aria-label={word}>
       <p className="signal">
         {caution.signal !== 'notice' && (
           <svg viewBox="0 0 30 27" aria-hidden="true">
@@ -33,7 +33,7 @@ export function CautionView({ caution }: { caution: Caution }) {
         {caution.avoid !== '' && <p {...own}>{caution.avoid}</p>}
         {caution.wear.length > 0 && <WearList codes={caution.wear} />}
       </div>
-    </aside>
+    </div>
   )
 }
 
