@@ -62,20 +62,18 @@ class BodyMaker {
       case 'code':
         return [
           this.paragraph(
-            piece.text
-              .split('\n')
-              .flatMap((line, at): Inline[] => [
-                ...(at > 0 ? [{ type: 'lineBreak' } as const] : []),
-                ...(line === ''
-                  ? []
-                  : [
-                      {
-                        type: 'text' as const,
-                        text: line.slice(0, 20_000),
-                        marks: [{ type: 'code' as const }],
-                      },
-                    ]),
-              ]),
+            piece.text.split('\n').flatMap((line, at): Inline[] => [
+              ...(at > 0 ? [{ type: 'lineBreak' } as const] : []),
+              ...(line === ''
+                ? []
+                : [
+                    {
+                      type: 'text' as const,
+                      text: line.slice(0, 20_000),
+                      marks: [{ type: 'code' as const }],
+                    },
+                  ]),
+            ]),
           ),
         ]
       case 'rule':
