@@ -1,6 +1,10 @@
 import type { GuideDocument, Step } from '../../shared/guide/schema'
 import { writeGuide, type Stored } from '../../fixtures/demo/author'
+import { dryer } from '../../fixtures/demo/guides/dryer'
 import { generator } from '../../fixtures/demo/guides/generator'
+import { grinder } from '../../fixtures/demo/guides/grinder'
+import { pump } from '../../fixtures/demo/guides/pump'
+import { stove } from '../../fixtures/demo/guides/stove'
 
 const HASH = '0'.repeat(64)
 const places = new Proxy({}, { get: () => ({ x: 5000, y: 5000 }) }) as Record<
@@ -13,29 +17,28 @@ const noFiles: Stored = {
   model: () => nothing,
 }
 
-/** A guide of 40 steps with the text of the demo's generator over and over, each time with ids of its own, and without pictures. */
+/** A guide of 40 steps, each with a text of its own: those of the demo library's guides one after the other, without their pictures. */
 export function fortySteps(): GuideDocument {
-  const doc = writeGuide(generator('C'), noFiles)
-  const section = doc.sections.flatMap(({ steps }) => steps).filter(({ when }) => when === undefined)
-  const steps = Array.from({ length: 40 }, (_, index): Step => {
-    const step = section[index % section.length]!
-    const text = JSON.stringify({ ...step, figures: [], models: [] }).replace(
-      /"id":"([^"]{1,34})[^"]*"/g,
-      `"id":"$1-${index}xx"`,
-    )
-    return { ...(JSON.parse(text) as Step), title: `${step.title} (${index + 1})` }
-  })
+  const docs = [generator('C'), pump, dryer, grinder, stove].map((notes) => writeGuide(notes, noFiles))
+  const all = docs
+    .flatMap(({ sections }) => sections.flatMap(({ steps }) => steps))
+    .filter(({ when }) => when === undefined)
+  const steps = all.slice(0, 40).map((step): Step => ({ ...step, figures: [], models: [] }))
+  if (steps.length < 40) throw new Error('The demo library has fewer than 40 steps.')
+  const parts = [0, 10, 20, 30].map((from) => ({
+    id: `bench-section-${from}`,
+    title: `Part ${from / 10 + 1}`,
+    steps: steps.slice(from, from + 10),
+  }))
   return {
-    ...doc,
+    ...docs[0]!,
     title: 'A guide of forty steps',
     front: null,
     figures: [],
     models: [],
     assets: [],
-    sections: [0, 1, 2, 3].map((part) => ({
-      id: `bench-section-${part}`,
-      title: `Part ${part + 1}`,
-      steps: steps.slice(part * 10, part * 10 + 10),
-    })),
+    lines: docs.flatMap(({ lines }) => lines),
+    tools: docs.flatMap(({ tools }) => tools),
+    sections: parts,
   }
 }
