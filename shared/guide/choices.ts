@@ -1,5 +1,5 @@
 import type { Id } from '../lib/ids/id'
-import { holds, type Choices } from './holds'
+import { holds, lineById, type Choices } from './holds'
 import type { Condition, GuideDocument, Line } from './schema'
 
 type When = Condition | undefined
@@ -24,7 +24,7 @@ function decidingLines(doc: GuideDocument, conditions: readonly When[]): Line[] 
   const found = new Map<Id, Line>()
   const look = (when: When): void => {
     for (const clause of when ?? []) {
-      const line = found.has(clause.line) ? undefined : doc.lines.find(({ id }) => id === clause.line)
+      const line = found.has(clause.line) ? undefined : lineById(doc, clause.line)
       if (line === undefined) continue
       found.set(line.id, line)
       look(line.when)

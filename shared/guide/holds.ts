@@ -23,9 +23,22 @@ function clauseHolds(
   clause: Condition[number],
   asked: ReadonlySet<Id>,
 ): boolean {
-  const line = doc.lines.find((candidate) => candidate.id === clause.line)
+  const line = lineById(doc, clause.line)
   if (line === undefined || asked.has(line.id)) return false
   const further = new Set(asked).add(line.id)
   const present = (line.when ?? []).every((outer) => clauseHolds(doc, choices, outer, further))
   return present && clause.is.includes(chosenOption(line, choices).id)
+}
+
+/** Lines by their ids, kept as long as the very list is: conditions are asked by the thousand, and edits share what they leave alone. */
+const byId = new WeakMap<readonly Line[], ReadonlyMap<Id, Line>>()
+
+/** The line with this id, or undefined. Cost O(1) but for the first time with a list. */
+export function lineById(doc: GuideDocument, id: Id): Line | undefined {
+  let known = byId.get(doc.lines)
+  if (known === undefined) {
+    known = new Map(doc.lines.map((line) => [line.id, line]))
+    byId.set(doc.lines, known)
+  }
+  return known.get(id)
 }

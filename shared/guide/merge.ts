@@ -1,5 +1,4 @@
 import type { Id } from '../lib/ids/id'
-import { canonicalJson } from '../lib/json/hash'
 import type { GuideDocument } from './schema'
 
 /** A place that both sides changed in different ways. The merged document holds the preferred side; both are given here. */
@@ -347,9 +346,12 @@ const wordsOf = (value: Json | undefined): string[] => (isWordList(value) ? valu
 
 const nodesOf = (value: Json | undefined): JsonObject[] => (isKeyedList(value) ? value : [])
 
+/** Whether two values have the same canonical JSON, found without writing it: merging compares every text of three documents. */
 function same(a: Json | undefined, b: Json | undefined): boolean {
   if (a === b) return true
-  if (a === undefined || b === undefined || a === null || b === null) return false
-  if (typeof a !== 'object' || typeof b !== 'object') return false
-  return canonicalJson(a) === canonicalJson(b)
+  if (Array.isArray(a))
+    return Array.isArray(b) && a.length === b.length && a.every((item, index) => same(item, b[index]))
+  if (!isObject(a) || !isObject(b)) return false
+  const [keysOfA, keysOfB] = [a, b].map((side) => Object.keys(side).filter((key) => side[key] !== undefined))
+  return keysOfA!.length === keysOfB!.length && keysOfA!.every((key) => same(a[key], b[key]))
 }

@@ -35,6 +35,13 @@ describe('the words of a guide', () => {
   })
 })
 
+test('a text of a megabyte is cut without taking all memory, and no word is cut in two', () => {
+  const sentence = 'Push the bearing into its seat, 0.2 mm deep. '
+  const words = cutWords(sentence.repeat(25_000), 'en')
+  expect(words).toBe(`${'Push the bearing into its seat 0.2 mm deep '.repeat(25_000)}`.trim())
+  expect(searchQuery('x'.repeat(1_000_000), 'en')).toBeDefined()
+})
+
 describe('what is typed finds', () => {
   const find = indexOf(
     'shaft bearing 6204 2RS',

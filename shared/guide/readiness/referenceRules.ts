@@ -1,6 +1,7 @@
 import type { Id } from '../../lib/ids/id'
 import { choicesWithout, namesOfChoices } from '../choices'
 import type { FindingPlace } from '../finding'
+import { lineById } from '../holds'
 import { inlinesOf } from '../plainText'
 import type { Block, Condition, Line, Step } from '../schema'
 import { targetOf, type Target } from '../withoutReferences'
@@ -81,7 +82,7 @@ export const referenceRules = {
     find: (look) =>
       inStepsWith(look, (step) =>
         step.uses.flatMap((use) => {
-          const line = look.doc.lines.find(({ id }) => id === use.line)
+          const line = lineById(look.doc, use.line)
           return absent(look, [step.when, use.when], line?.when, onStep(step.id, use.id, 'when'), line)
         }),
       ),
@@ -208,7 +209,7 @@ function bodyAbsent(look: Look, step: Step): Found[] {
       return (block.content ?? []).flatMap((inline): Found[] => {
         const target = targetOf(inline)
         if (target === undefined || target.target === 'figure' || seen.has(target.id)) return []
-        const line = look.doc.lines.find(({ id }) => id === target.id)
+        const line = lineById(look.doc, target.id)
         const other = look.steps.find(({ id }) => id === target.id)
         const found = absent(look, outer, (line ?? other)?.when, place, line)
         if (found.length > 0) seen.add(target.id)
