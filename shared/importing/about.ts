@@ -43,13 +43,13 @@ const COMMON: [string, RegExp][] = [
   ['de', /\b(der|die|das|und|mit|ist|nicht|ein|eine)\b/gi],
   ['es', /\b(el|los|las|con|para|una|del|por)\b/gi],
   ['fr', /\b(le|les|des|avec|pour|une|est|dans)\b/gi],
-  ['pt', /\b(os|as|com|para|uma|não|do|da|em)\b/gi],
-  ['it', /\b(il|gli|con|per|una|della|che|di)\b/gi],
+  ['pt', /\b(os|para|uma|não|da|em|são|você)\b/gi],
+  ['it', /\b(il|gli|con|una|della|che|di)\b/gi],
 ]
 
 /** The language of a text by its script or its commonest words. A suggestion. */
 export function languageOf(text: string): string {
-  const sample = text.slice(0, 20_000)
+  const sample = text.slice(0, 20_000).replace(/\S*(:\/\/|[/\\])\S*/g, ' ')
   const count = (pattern: RegExp): number => sample.match(pattern)?.length ?? 0
   const letters = count(/\p{L}/gu)
   if (letters === 0) return 'en'

@@ -1,3 +1,4 @@
+import { findMinutes } from './findMinutes'
 import { picturesOf, plainPiece, plainWords, type Piece, type Words } from './page'
 import { tidy, withoutStart } from './readMarkdown'
 import { bareTitle, isAside, isNumbered, isPartsTitle, isToolsTitle } from './titles'
@@ -46,7 +47,7 @@ export function divide(pieces: readonly Piece[], fallbackTitle: string): Divisio
   const stepDepth = numberedDepth(building)
   division.by = stepDepth !== null ? 'numbered headings' : ruleFor(building)
   if (stepDepth !== null) byHeadings(division, building, stepDepth)
-  else for (const part of building) addPart(division, part)
+  else for (const part of building) addPart(division, part, parts.length === 1)
   return division
 }
 
@@ -124,8 +125,8 @@ const holdsText = (pieces: readonly Piece[]): boolean =>
 /** Portions of one parent heading stand together. */
 function sectionFor(division: Division, part: Part, own = false): Portion[] {
   const title = bareTitle((own && part.title !== '' ? part.title : part.above.at(-1)) ?? division.title)
-  const last = division.sections.at(-1)
-  if (last?.title === title) return last.portions
+  const same = division.sections.find((section) => section.title === title)
+  if (same !== undefined) return same.portions
   const section = { title, portions: [] }
   division.sections.push(section)
   return section.portions
@@ -150,7 +151,7 @@ function ruleFor(parts: readonly Part[]): Division['by'] {
       : null
 }
 
-function addPart(division: Division, part: Part): void {
+function addPart(division: Division, part: Part, isAll: boolean): void {
   if (!holdsText(part.pieces)) return
   const aside = isAside(part.title)
   const isIntroduction =
@@ -167,7 +168,7 @@ function addPart(division: Division, part: Part): void {
   sectionFor(division, part).push({
     title: bareTitle(part.title || division.title),
     pieces: part.pieces,
-    include: !aside && !(isIntroduction && division.by !== 'pictures') && division.by !== null,
+    include: !aside && !(isIntroduction && !isAll) && division.by !== null,
   })
 }
 
@@ -238,7 +239,7 @@ function pairs(pieces: readonly Piece[]): Portion[] {
   let texts: Piece[] = []
   let shown = false
   const close = (): void => {
-    const text = texts.map(plainPiece).find((one) => one !== '')
+    const text = texts.map(plainPiece).find((one) => one !== '' && findMinutes(one) === undefined)
     if (shown && text !== undefined)
       portions.push({ title: firstSentence(text), pieces: texts, include: true })
     else if (texts.length > 0 && portions.length > 0) portions.at(-1)!.pieces.push(...texts)

@@ -36,7 +36,7 @@ function lineOf(table: UnderstoodTable, row: UnderstoodRow, section: string): Li
       .filter((text) => text !== '')
   const quantityColumn = all('quantity')[0]
   const shifted = shiftOf(row, quantityColumn)
-  const named = texts('name')[0] ?? ''
+  const named = withoutMark(texts('name')[0] ?? '')
   const name =
     shifted === null
       ? named
@@ -53,6 +53,7 @@ function lineOf(table: UnderstoodTable, row: UnderstoodRow, section: string): Li
   const quantity =
     read === undefined || read === null || unit === undefined ? (read ?? null) : withUnit(read, typed, unit)
   const note = [
+    ...(isPlainSheet(table.sheet) ? [] : [table.sheet]),
     ...(section === '' ? [] : [section]),
     ...texts('group'),
     ...texts('reference'),
@@ -95,10 +96,18 @@ function labelled(table: UnderstoodTable, row: UnderstoodRow, meaning: ColumnMea
     .filter((column) => column.meaning === meaning)
     .flatMap((column) => {
       const text = plainCell(cellOf(row, column))
-      if (text === '' || text === '-') return []
+      if (text === '' || text === '-' || withoutMark(text) === '') return []
       return [/note|comment|remark|obs|备注|^$/i.test(column.heading) ? text : `${column.heading}: ${text}`]
     })
 }
+
+/** A sheet's name that says nothing of its parts. */
+const isPlainSheet = (sheet: string): boolean =>
+  sheet === '' ||
+  /^(sheet|tabelle|hoja|feuille|planilha|bom|parts( list)?|bill of materials)\s*\d*$/i.test(sheet)
+
+/** Without the marks of footnotes; "mm²" keeps its square. */
+const withoutMark = (text: string): string => text.replace(/(?<!\b[cdk]?m)[⁰¹²³⁴-⁹]+$/u, '').trim()
 
 function withUnit(read: Quantity, typed: string, unit: string): Quantity {
   if (read.unit !== 'each') return read

@@ -24,9 +24,9 @@ export function bareTitle(title: string): string {
 
 /** What is no part of building: about the project, its people, its programs. */
 export const isAside = (title: string): boolean =>
-  /licen[cs]|contribut|credit|acknowledg|reference|resource|media|conduct|contact|support us|faq|change ?log|citation|cite|sponsor|table of contents|^contents$|footnote|background|overview|status|related|community|star history|roadmap|\bto.?do\b|what'?s in|what is included|authors?$|gallery|diagram|total cost|software|firmware|why |choosing|news|tl;?dr|motivation|introduction|disclaimer|fu(ß|ss)note|lizenz|licencia|licença|致谢|许可|引用|概述|رخصة/i.test(
+  /licen[cs]|contribut|more (details|information)|copyright|^description$|credit|acknowledg|reference|resource|media|conduct|contact|support us|faq|change ?log|citation|cite|sponsor|table of contents|^contents$|footnote|background|overview|status|related|community|star history|roadmap|\bto.?do\b|what'?s in|what is included|authors?$|gallery|diagram|total cost|software|firmware|why |choosing|news|tl;?dr|motivation|introduction|disclaimer|fu(ß|ss)note|lizenz|licencia|licença|致谢|许可|引用|概述|رخصة/i.test(
     title,
-  )
+  ) && !/assembl|build (instr|proc|step|guide)|montage|aufbau/i.test(title)
 
 export const isPartsTitle = (title: string): boolean =>
   /\bparts\b(?! (list )?assembly)|materials?\b|bill of materials|\bbom\b|components needed|hardware list|what you (will )?need|you will need|shopping list|stückliste|\bteile\b|materialien|materiales|piezas|matériel|pièces|\bpeças|materiais|materiali|材料|部件|清单|المواد|القطع/i.test(
@@ -39,7 +39,7 @@ export const isToolsTitle = (title: string): boolean =>
 
 /** "Option 2", "Alternative B", "For the 12V version". */
 export const isChoice = (text: string): boolean =>
-  /^\W*(option|alternative|variant|version|variante|opción|الخيار)\s*[\dA-H]\b|^\W*for the\b.{1,40}\b(version|variant|build|model)\b|^\W*\S{1,20}\s+version\b/i.test(
+  /^\W*(option|alternative|variant|variante|opción|الخيار)\s*[\dA-H]\b|^\W*for the\b.{1,40}\b(version|variant|build|model)\b|^\W*\S{1,20}\s+version\b/i.test(
     text,
   )
 

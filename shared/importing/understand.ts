@@ -11,7 +11,7 @@ import { picturesOf, plainPiece, plainWords, type Page, type Picture, type Piece
 import { readCells } from './readCells'
 import { readMarkdown } from './readMarkdown'
 import { cellOf, isPartsList, plainCell, readTable } from './readTable'
-import { isChoice, isPartsTitle } from './titles'
+import { bareTitle, isChoice, isPartsTitle } from './titles'
 import { isWordless, toBody } from './toBody'
 import type {
   Understanding,
@@ -213,6 +213,7 @@ class Reading {
       isPartsTitle(division.title) || /(^|[/_-])(bom|parts?(list)?|materials?)\.[a-z]+$/i.test(page.path)
     const tells = !isParts && !isOld(page.path) && (tellsSteps(page, division, pages) || !isGuide)
     this.addTools(division.tools)
+    this.findChoices(page)
     const sections = division.sections.map(({ title, portions }) => ({
       title,
       portions: portions.map((portion) => {
@@ -252,9 +253,14 @@ class Reading {
     const kept: Piece[] = []
     const lines: LineOfRow[] = []
     for (const piece of pieces) {
-      const tables =
-        piece.kind === 'table' ? readTable(piece.cells, from, clean(title, 300), this.key('table')) : []
-      if (piece.kind === 'table' && tables.some(({ columns }) => isPartsList(columns))) {
+      const caption = captionOf(kept.at(-1))
+      const name = clean(bareTitle(caption ?? title), 300)
+      const tables = piece.kind === 'table' ? readTable(piece.cells, from, name, this.key('table')) : []
+      if (
+        piece.kind === 'table' &&
+        tables.some(({ columns, headingRow }) => headingRow !== null && isPartsList(columns))
+      ) {
+        if (caption !== undefined) kept.pop()
         for (const table of tables) lines.push(...this.addTable(table))
         if (piece.pictures.length > 0) kept.push({ kind: 'paragraph', words: [], pictures: piece.pictures })
       } else kept.push(piece)
@@ -289,7 +295,7 @@ class Reading {
       kind: 'bought',
       quantity: use.quantity,
       asNeeded: false,
-      typed: clean(use.typed, 200),
+      typed: use.sentence === null ? clean(use.typed, 200) : '',
       note: '',
       sources: [],
       substitutes: [],
@@ -303,7 +309,6 @@ class Reading {
 
   private addSections(page: ReadPage, sections: ReturnType<Reading['takeTables']>['sections']): void {
     for (const { title, portions } of sections) {
-      if (isChoice(title)) this.result.choices.push({ what: clean(title, 300), where: page.path })
       const steps = portions
         .filter(({ pieces, uses }) => uses.length > 0 || picturesOf(pieces).length > 0 || !isWordless(pieces))
         .map((portion) => this.stepOf(page, portion))
@@ -323,7 +328,6 @@ class Reading {
     page: ReadPage,
     portion: Portion & { uses: FoundUse[]; lines: LineOfRow[] },
   ): UnderstoodStep {
-    this.findChoices(page.path, portion)
     const text = portion.pieces.map(readable).join('\n')
     const minutes = text
       .split('\n')
@@ -391,17 +395,19 @@ class Reading {
     }
   }
 
-  private findChoices(path: string, portion: Portion): void {
-    const offered = portion.pieces.flatMap((piece) =>
-      piece.kind === 'paragraph'
-        ? [plainWords(piece.words)]
-        : piece.kind === 'list'
-          ? piece.items.map((item) => item.map(plainPiece).join(' '))
-          : [],
-    )
-    for (const what of [portion.title, ...offered]) {
-      if (isChoice(what) && this.result.choices.length < 1000)
-        this.result.choices.push({ what: clean(what, 300), where: path })
+  /** Headings and items that offer a way among several. */
+  private findChoices({ path, page }: ReadPage): void {
+    const offered = (pieces: readonly Piece[]): string[] =>
+      pieces.flatMap((piece) =>
+        piece.kind === 'list'
+          ? piece.items.flatMap(offered)
+          : piece.kind === 'heading' || piece.kind === 'paragraph'
+            ? [plainWords(piece.words)]
+            : [],
+      )
+    for (const what of offered(page.pieces)) {
+      if (isChoice(what))
+        this.result.choices.push({ what: clean(bareTitle(what), 300), where: clean(path, 2000) })
     }
   }
 
@@ -538,10 +544,18 @@ class Reading {
 /** Whether a page tells how to build, by how it divides, its name or its being the only one. */
 function tellsSteps({ path }: ReadPage, division: Division, pages: number): boolean {
   if (division.by === null) return false
-  if (division.by !== 'headings') return true
+  if (division.by !== 'headings' && division.by !== 'pictures') return true
   const words =
     /build|assembl|instruct|guide|manual|mount|wiring|prepar|procedure|print|montage|aufbau|anleitung|montaje|montagem/i
   return pages === 1 || words.test(path) || words.test(division.title)
+}
+
+/** Bold words right above a table are its title. */
+function captionOf(piece: Piece | undefined): string | undefined {
+  if (piece?.kind !== 'paragraph' || piece.pictures.length > 0 || piece.words.length !== 1) return undefined
+  const [word] = piece.words
+  const bold = word?.type === 'text' && word.marks?.some(({ type }) => type === 'strong') === true
+  return bold && word.text.length <= 100 ? word.text : undefined
 }
 
 /** Lines of a text, one for each block. */
@@ -553,7 +567,7 @@ function readable(piece: Piece): string {
 
 /** "Wood screws 12x4. Make sure …" → name and the rest. */
 function splitName(text: string): { name: string; specification: string } {
-  const sentence = /^(.{3,}?[^\d\s])[.;,]\s+(.*)$/su.exec(text)
+  const sentence = /^(.{3,}?[^\d\s])[.;]\s+(.*)$/su.exec(text)
   if (sentence !== null)
     return { name: sentence[1]!.slice(0, 300), specification: sentence[2]!.slice(0, 4000) }
   return text.length <= 120
