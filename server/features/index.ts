@@ -8,6 +8,8 @@ import { accountRoutes } from './accounts/routes'
 import { draftRoutes } from './drafts/routes'
 import { fileRoutes } from './files/routes'
 import { guideRoutes } from './guides/routes'
+import { handleImportJobs } from './importing/handleImportJobs'
+import { importRoutes } from './importing/routes'
 import { mailRoutes } from './mail/routes'
 import { peopleRoutes } from './people/routes'
 import { revisionRoutes } from './revisions/routes'
@@ -22,6 +24,7 @@ export function featureRoutes(ctx: Context, auth: Auth): Router {
   router.use(draftRoutes(ctx))
   router.use(fileRoutes(ctx))
   router.use(revisionRoutes(ctx))
+  router.use(importRoutes(ctx))
   return router
 }
 
@@ -30,4 +33,5 @@ export function featureJobs(ctx: Context): void {
   handleMailJobs(ctx)
   handleFileJobs(ctx)
   handleGuideJobs(ctx)
+  handleImportJobs(ctx)
 }

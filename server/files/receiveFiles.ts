@@ -23,7 +23,7 @@ export async function receiveFiles(
   ctx: Context,
   req: Request,
   res: Response,
-  limits: { most: number; bytes: number },
+  limits: { most: number; bytes: number; fieldBytes?: number },
 ): Promise<ReceivedFile[]> {
   const received: ReceivedFile[] = []
   const form = multer({
@@ -31,7 +31,7 @@ export async function receiveFiles(
     limits: {
       files: limits.most,
       fields: 20,
-      fieldSize: 10_000,
+      fieldSize: limits.fieldBytes ?? 10_000,
       fieldNameSize: 100,
       parts: limits.most + 20,
     },
