@@ -1,10 +1,12 @@
 import { readFileSync } from 'node:fs'
 import path from 'node:path'
+import compression from 'compression'
 import express, { type Router } from 'express'
 import type { ViteDevServer } from 'vite'
 import { z } from 'zod'
 import type { RenderPage } from '../../shared/api/pages'
 import { rootDir } from '../db/open'
+import { packedFiles } from './packedFiles'
 
 /** How pages are rendered and where the browser's files are: built in production, from Vite's middleware in development. */
 export interface Renderer {
@@ -35,8 +37,11 @@ const Manifest = z.record(z.string(), z.object({ file: z.string() }))
 
 export function builtRenderer(router: Router): Renderer {
   const client = path.join(rootDir(), 'dist/client')
+  // What the browser loads of the application is text for the most part, and large.
+  router.use('/assets', compression())
   router.use(
     '/assets',
+    packedFiles(path.join(client, 'assets')),
     express.static(path.join(client, 'assets'), { immutable: true, maxAge: '1y', index: false }),
   )
   const manifest = Manifest.parse(JSON.parse(readFileSync(path.join(client, '.vite/manifest.json'), 'utf8')))

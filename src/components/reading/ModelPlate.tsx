@@ -39,7 +39,7 @@ export function ModelPlate({ model }: { model: Model }) {
       </div>
       <div className="side">
         {file?.model !== undefined && file.model !== null && <Measures model={model} facts={file.model} />}
-        <p className="actions mt-3">
+        <p className="actions after">
           {preview !== undefined && (
             <button
               type="button"
