@@ -54,9 +54,9 @@ export function pageRoutes(
     const html = render({ data, language: languageOf(req), origin, path: req.path, ...parts, demo })
     res.type('html').vary('Accept-Encoding').vary('Accept-Language').vary('Cookie')
     res.set('cache-control', cachingOf(data))
-    const page = await packPage(html, { ...res.getHeaders() })
-    if (isLasting(data)) kept.keep(keyOf(req), page, before)
-    answerPacked(req, res, page, data.page === 'missing' ? 404 : 200)
+    const headers = { ...res.getHeaders() }
+    answerPacked(req, res, await packPage(html, headers, 'quickly'), data.page === 'missing' ? 404 : 200)
+    if (isLasting(data)) await kept.keepWhenPacked(keyOf(req), before, () => packPage(html, headers, 'small'))
   }
 
   const guidePage = (place: Place) => async (req: Request, res: Response) => {
