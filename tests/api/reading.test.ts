@@ -55,17 +55,17 @@ const get = (address: string, headers: Record<string, string> = {}): Promise<Res
 /** Needs `vite build --app`, which `npm test` runs first. */
 describe('reading pages of the built site', () => {
   beforeAll(async () => {
-    let pages: Pages | undefined
+    const made: { pages?: Pages } = {}
     const router = Router()
-    router.use((req, res, next) => pages!.router(req, res, next))
+    router.use((req, res, next) => made.pages!.router(req, res, next))
     site = await TestSite.start({
       pages: () => ({
         router,
-        serveKept: (req, res) => pages!.serveKept(req, res),
-        close: async () => pages?.close(),
+        serveKept: (req, res) => made.pages!.serveKept(req, res),
+        close: async () => made.pages?.close(),
       }),
     })
-    pages = await createPages(site.ctx, createServer())
+    made.pages = await createPages(site.ctx, createServer())
     owner = site.person().id
     publish('hand-pump', guide(TITLES.pump, 'en'))
     publish('arabic-pump', guide(TITLES.arabic, 'ar'))
