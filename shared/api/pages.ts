@@ -26,6 +26,9 @@ export interface LibraryQuestion {
   q: string
   machine: string
   language: string
+  /** A skill and a tool by the name that guides give them. */
+  skill: string
+  tool: string
   sort: 'date' | 'title'
   page: number
 }
@@ -37,6 +40,8 @@ export interface LibraryData {
   pageSize: number
   machines: { value: MachineKind; count: number }[]
   languages: { value: string; count: number }[]
+  skills: { value: string; count: number }[]
+  tools: { value: string; count: number }[]
 }
 
 /** A guide at one of its revisions. */

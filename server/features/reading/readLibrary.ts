@@ -7,13 +7,15 @@ import { stepsOf } from '../../../shared/guide/stepsOf'
 import type { Context } from '../../context'
 import { presentFile } from '../../files/presentFile'
 import { readFiles } from '../../files/repo'
-import { facetOf, libraryPage, libraryTotal, PAGE_SIZE } from './repo'
+import { facetOf, libraryPage, libraryTotal, namesOf, PAGE_SIZE } from './repo'
 
 /** A question from the address. What makes no sense is taken as not asked: a reader's address never fails. */
 export const Question: z.ZodType<LibraryQuestion> = z.object({
   q: z.string().max(200).catch(''),
   machine: z.string().max(40).catch(''),
   language: z.string().max(35).catch(''),
+  skill: z.string().max(300).catch(''),
+  tool: z.string().max(300).catch(''),
   sort: z.enum(['date', 'title']).catch('date'),
   page: z.coerce.number().int().min(1).max(10_000).catch(1),
 })
@@ -29,6 +31,8 @@ export function readLibrary(ctx: Context, question: LibraryQuestion): LibraryDat
       return kind.success ? [{ value: kind.data, count }] : []
     }),
     languages: facetOf(ctx.db, question, 'language'),
+    skills: namesOf(ctx.db, question, 'skill'),
+    tools: namesOf(ctx.db, question, 'tool'),
   }
 }
 

@@ -8,6 +8,8 @@ export type GuideRow = typeof guides.$inferSelect
 export type RevisionRow = typeof revisions.$inferSelect
 
 export const PAGE_SIZE = 20
+/** A list to choose from stays short; the field for words finds the rest. */
+const MOST_NAMES = 12
 
 export function guideBySlug(db: Db, slug: string): GuideRow | undefined {
   return db.select().from(guides).where(eq(guides.slug, slug)).get()
@@ -52,8 +54,14 @@ function asked(question: LibraryQuestion): SQL | undefined {
       : sql`${guides.id} in (select guide_id from guide_search where guide_search match ${query})`,
     question.machine === '' ? undefined : eq(machine, question.machine),
     question.language === '' ? undefined : eq(language, question.language),
+    question.skill === '' ? undefined : names(question.skill, '$.skills'),
+    question.tool === '' ? undefined : names(question.tool, '$.tools'),
   )
 }
+
+/** The document has a skill or a tool of this name. */
+const names = (name: string, list: '$.skills' | '$.tools'): SQL =>
+  sql`exists (select 1 from json_each(${documents.json}, ${list}) where json_extract(value, '$.name') = ${name} collate nocase)`
 
 /** The guides that answer a question, as their latest revision has them, a page at a time. */
 export function libraryPage(db: Db, question: LibraryQuestion) {
@@ -80,6 +88,23 @@ export function libraryTotal(db: Db, question: LibraryQuestion): number {
 export function facetOf(db: Db, question: LibraryQuestion, facet: 'machine' | 'language') {
   const rest = { ...question, [facet]: '' }
   return libraryRows(db, rest, facet === 'machine' ? machine : language)
+}
+
+/** The commonest names of skills or tools among the guides that answer the rest of the question, and how many guides have each. */
+export function namesOf(db: Db, question: LibraryQuestion, facet: 'skill' | 'tool') {
+  const list = facet === 'skill' ? '$.skills' : '$.tools'
+  const name = sql<string>`json_extract(each.value, '$.name')`
+  return db
+    .select({ value: name, count: sql<number>`count(distinct ${guides.id})` })
+    .from(revisions)
+    .innerJoin(guides, eq(guides.id, revisions.guideId))
+    .innerJoin(documents, eq(documents.hash, revisions.documentHash))
+    .innerJoin(sql`json_each(${documents.json}, ${list}) as each`, sql`1`)
+    .where(and(asked({ ...question, [facet]: '' }), sql`${name} <> ''`))
+    .groupBy(sql`${name} collate nocase`)
+    .orderBy(sql`2 desc`, name)
+    .limit(MOST_NAMES)
+    .all()
 }
 
 function libraryRows(db: Db, question: LibraryQuestion, by: SQL) {

@@ -38,6 +38,9 @@ export function LibraryPage({ library }: { library: LibraryData }) {
               <b>{t('guideCount', { count: library.total })}</b>{' '}
               {question.q !== '' && t('with', { q: question.q })}
             </p>
+            <a className="note to-narrow" href="#narrow">
+              {t('narrow')}
+            </a>
             <p className="note">
               {t('inOrderOf')} {question.sort === 'date' ? t('date') : t('title')};{' '}
               <a href={address(question, { sort: question.sort === 'date' ? 'title' : 'date', page: 1 })}>
@@ -68,6 +71,8 @@ function address(question: LibraryQuestion, change: Partial<LibraryQuestion>): s
   if (asked.q !== '') search.set('q', asked.q)
   if (asked.machine !== '') search.set('machine', asked.machine)
   if (asked.language !== '') search.set('language', asked.language)
+  if (asked.skill !== '') search.set('skill', asked.skill)
+  if (asked.tool !== '') search.set('tool', asked.tool)
   if (asked.sort !== 'date') search.set('sort', asked.sort)
   if (asked.page > 1) search.set('page', String(asked.page))
   const text = search.toString()
@@ -87,7 +92,7 @@ function Narrow({ library }: { library: LibraryData }) {
   const { question } = library
   const names = new Intl.DisplayNames(language, { type: 'language' })
   return (
-    <nav className="narrow" aria-label={t('narrow')}>
+    <nav className="narrow" id="narrow" aria-label={t('narrow')}>
       <Facet
         title={t('kindOfMachine')}
         chosen={question.machine}
@@ -107,6 +112,18 @@ function Narrow({ library }: { library: LibraryData }) {
           text: names.of(value) ?? value,
         }))}
         to={(chosen) => address(question, { language: chosen, page: 1 })}
+      />
+      <Facet
+        title={t('skill')}
+        chosen={question.skill}
+        choices={library.skills.map((skill) => ({ ...skill, text: skill.value }))}
+        to={(skill) => address(question, { skill, page: 1 })}
+      />
+      <Facet
+        title={t('tool')}
+        chosen={question.tool}
+        choices={library.tools.map((tool) => ({ ...tool, text: tool.value }))}
+        to={(tool) => address(question, { tool, page: 1 })}
       />
     </nav>
   )
@@ -202,7 +219,7 @@ function Entry({ entry }: { entry: LibraryEntry }) {
 
 function Empty({ question }: { question: LibraryQuestion }) {
   const { t } = useWords()
-  const asked = question.q !== '' || question.machine !== '' || question.language !== ''
+  const asked = address(question, { sort: 'date', page: 1 }) !== '/guides'
   return (
     <div className="empty">
       <p>{asked ? t('nothingFound') : t('libraryEmpty')}</p>
