@@ -1,4 +1,4 @@
-import { useState } from 'react'
+import { useEffect, useRef, useState } from 'react'
 import { Dialog as AriaDialog, Popover } from 'react-aria-components'
 import { useTranslation } from 'react-i18next'
 import { parseMeasure } from '../../../../shared/guide/parseQuantity'
@@ -26,6 +26,15 @@ export function CalloutForm({ callout, anchor, onSet, onRemove, onClose }: Callo
   const { t } = useTranslation('editingFigures')
   const { document } = useDraft()
   const nameOf = useCalloutName()
+  const fields = useRef<HTMLDivElement>(null)
+  const { shape } = callout
+  useEffect(() => {
+    // A part was chosen before; of the others the first thing is to say what they mean.
+    if (shape === 'balloon') return
+    const first = fields.current?.querySelector<HTMLInputElement | HTMLTextAreaElement>('input, textarea')
+    first?.focus()
+    first?.select()
+  }, [shape])
   return (
     <Popover
       className="popover callout-form"
@@ -35,32 +44,34 @@ export function CalloutForm({ callout, anchor, onSet, onRemove, onClose }: Callo
       placement="bottom"
     >
       <AriaDialog aria-label={nameOf(callout)} className="dialog-box">
-        {callout.shape === 'balloon' && (
-          <ChooseByName
-            label={t('form.part')}
-            value={callout.line}
-            items={document.lines.map((line) => ({
-              id: line.id,
-              text: line.options[0]!.part.name,
-              content: (
-                <span className="choice-of-line">
-                  <PartBalloon line={line.id} />
-                  <span dir="auto">{line.options[0]!.part.name}</span>
-                </span>
-              ),
-            }))}
-            onChange={(line) => onSet({ line }, 'line')}
+        <div className="callout-fields" ref={fields}>
+          {callout.shape === 'balloon' && (
+            <ChooseByName
+              label={t('form.part')}
+              value={callout.line}
+              items={document.lines.map((line) => ({
+                id: line.id,
+                text: line.options[0]!.part.name,
+                content: (
+                  <span className="choice-of-line">
+                    <PartBalloon line={line.id} />
+                    <span dir="auto">{line.options[0]!.part.name}</span>
+                  </span>
+                ),
+              }))}
+              onChange={(line) => onSet({ line }, 'line')}
+            />
+          )}
+          {callout.shape === 'dimension' && (
+            <MeasureFields measure={callout.value} onChange={(value) => onSet({ value }, 'value')} />
+          )}
+          <GuideText
+            label={t('form.text')}
+            optional={callout.shape !== 'arrow'}
+            value={callout.text ?? ''}
+            onChange={(text) => onSet({ text: text === '' ? undefined : text }, 'text')}
           />
-        )}
-        {callout.shape === 'dimension' && (
-          <MeasureFields measure={callout.value} onChange={(value) => onSet({ value }, 'value')} />
-        )}
-        <GuideText
-          label={t('form.text')}
-          optional={callout.shape !== 'arrow'}
-          value={callout.text ?? ''}
-          onChange={(text) => onSet({ text: text === '' ? undefined : text }, 'text')}
-        />
+        </div>
         <div className="actions">
           <Button kind="go" onClick={onClose}>
             {t('form.done')}

@@ -1,3 +1,4 @@
+import { useState } from 'react'
 import { useTranslation } from 'react-i18next'
 import { LineKind, type Line } from '../../../../shared/guide/schema'
 import { unitCodes } from '../../../../shared/lib/units/units'
@@ -9,6 +10,7 @@ export interface CellInputProps {
   column: Column
   line: Line
   kinds: KindWords
+  /** What it begins with. */
   text: string
   onWrite: (text: string) => void
   onTake: (text: string) => void
@@ -16,9 +18,14 @@ export interface CellInputProps {
 }
 
 /** What a cell becomes while it is written in. */
-export function CellInput({ column, line, kinds, text, onWrite, onTake, errorId }: CellInputProps) {
+export function CellInput({ column, line, kinds, text: begun, onWrite, onTake, errorId }: CellInputProps) {
   const { t } = useTranslation('editingLedger')
   const { document } = useDraft()
+  const [text, setText] = useState(begun)
+  const write = (now: string): void => {
+    setText(now)
+    onWrite(now)
+  }
   const common = {
     ref: beginWriting,
     'aria-label': t(`column.${column}`),
@@ -52,7 +59,7 @@ export function CellInput({ column, line, kinds, text, onWrite, onTake, errorId 
         dir="auto"
         lang={document.lang}
         value={text}
-        onChange={(event) => onWrite(event.target.value)}
+        onChange={(event) => write(event.target.value)}
       />
     )
   }
@@ -65,7 +72,7 @@ export function CellInput({ column, line, kinds, text, onWrite, onTake, errorId 
       lang={words ? document.lang : undefined}
       inputMode={column === 'spare' ? 'decimal' : undefined}
       value={text}
-      onChange={(event) => onWrite(event.target.value)}
+      onChange={(event) => write(event.target.value)}
     />
   )
 

@@ -32,7 +32,11 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
   const grid = useRef<HTMLTableElement>(null)
   const [kept, setState] = useState(startOfGrid)
   const [inGrid, setInGrid] = useState(false)
-  const size = { rows: lines.length, columns: COLUMNS.length }
+  // What is being written lives here and not in the state: a key pressed in one cell must not draw all the others again.
+  const written = useRef('')
+  const hasModels = document.models.length > 0 || document.lines.some(({ kind }) => kind === 'printed')
+  const columns = hasModels ? COLUMNS : COLUMNS.filter((column) => column !== 'model')
+  const size = { rows: lines.length, columns: columns.length }
   // Lines may have gone since: the cursor is never outside.
   const state =
     kept.row < lines.length || lines.length === 0 ? kept : gridAt(kept, size, lines.length - 1, kept.column)
@@ -40,13 +44,12 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
   const ids = lines.map(({ id }) => id)
   const byId = new Map(document.lines.map((line) => [line.id, line]))
   const reorder = useReorder(ids, acts.moveTo)
-  const hasModels = document.models.length > 0 || document.lines.some(({ kind }) => kind === 'printed')
 
   const focusAt = (row: number, column: number): void => {
     const id = ids[row]
     if (id === undefined) return
     const cell = grid.current?.querySelector<HTMLElement>(
-      `[data-node="${CSS.escape(id)}"] [data-column="${COLUMNS[column]!}"]`,
+      `[data-node="${CSS.escape(id)}"] [data-column="${columns[column]!}"]`,
     )
     cell?.focus({ preventScroll: true })
     cell?.scrollIntoView({ block: 'nearest', inline: 'nearest' })
@@ -69,7 +72,7 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
   const clearRange = (): void => {
     const cells = lines
       .slice(range.top, range.bottom + 1)
-      .flatMap(({ id }) => COLUMNS.slice(range.start, range.end + 1).map((column) => ({ line: id, column })))
+      .flatMap(({ id }) => columns.slice(range.start, range.end + 1).map((column) => ({ line: id, column })))
       // A line always is of some kind.
       .filter(({ column }) => column !== 'kind' && column !== 'unit')
     wrongCells.change(cells, [])
@@ -81,14 +84,15 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
     const step = gridKey(state, size, event, isRightToLeft(event.currentTarget))
     if (step.commit && state.editing !== null) {
       const line = lines[state.row]
-      if (line !== undefined && !readOnly) write(line.id, COLUMNS[state.column]!, state.editing.text)
+      if (line !== undefined && !readOnly) write(line.id, columns[state.column]!, written.current)
     }
     if (step.stop) {
       event.preventDefault()
       event.stopPropagation()
     }
     if (step.open !== undefined && !readOnly) {
-      const text = step.open === 'as it is' ? textAt(state.row, COLUMNS[state.column]!) : step.open.text
+      const text = step.open === 'as it is' ? textAt(state.row, columns[state.column]!) : step.open.text
+      written.current = text
       setState({ ...step.state, editing: { text } })
       return
     }
@@ -111,7 +115,7 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
     if (state.editing !== null || lines.length === 0) return
     event.preventDefault()
     const rows = Array.from({ length: range.bottom - range.top + 1 }, (_, row) =>
-      COLUMNS.slice(range.start, range.end + 1).map((column) => textAt(range.top + row, column)),
+      columns.slice(range.start, range.end + 1).map((column) => textAt(range.top + row, column)),
     )
     event.clipboardData.setData('text/plain', writeTsv(rows))
     announce(t('copied', { count: rows.length * rows[0]!.length }))
@@ -137,7 +141,7 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
     const drawn = block.flatMap(() => [newId(), newId()])
     const paste = (doc: GuideDocument) => {
       const rest = [...drawn]
-      return pasteBlock(doc, ids, at, block, kinds, () => rest.shift()!)
+      return pasteBlock(doc, ids, at, block, kinds, () => rest.shift()!, columns)
     }
     const { wrong, tried, added, beyond } = paste(document)
     wrongCells.change(tried, wrong)
@@ -161,7 +165,7 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
     setInGrid(true)
     const cell = event.target instanceof Element ? event.target.closest('[data-column]') : null
     const row = ids.indexOf(cell?.closest('[data-node]')?.getAttribute('data-node') ?? '')
-    const column = COLUMNS.indexOf(cell?.getAttribute('data-column') as Column)
+    const column = columns.indexOf(cell?.getAttribute('data-column') as Column)
     if (row === -1 || column === -1 || (row === state.row && column === state.column)) return
     if (state.editing === null) setState(gridAt(state, size, row, column))
   }
@@ -170,8 +174,7 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
     setInGrid(false)
     // What is being written is taken when one goes elsewhere.
     const line = lines[state.row]
-    if (state.editing !== null && line !== undefined)
-      write(line.id, COLUMNS[state.column]!, state.editing.text)
+    if (state.editing !== null && line !== undefined) write(line.id, columns[state.column]!, written.current)
     setState({ ...state, editing: null, leaving: false })
   }
 
@@ -186,7 +189,6 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
         aria-rowcount={lines.length + 1}
         aria-multiselectable
         aria-readonly={readOnly || undefined}
-        data-models={hasModels || undefined}
         onKeyDown={onKeyDown}
         onCopy={(event) => onCopy(event, false)}
         onCut={(event) => onCopy(event, true)}
@@ -196,10 +198,10 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
       >
         <thead>
           <tr aria-rowindex={1}>
-            <th scope="col">
+            <th scope="col" className="of-balloon">
               <span className="visually-hidden">{t('column.balloon')}</span>
             </th>
-            {COLUMNS.map((column) => (
+            {columns.map((column) => (
               <th key={column} scope="col" className={`of-${column}`}>
                 {t(`column.${column}`)}
               </th>
@@ -207,7 +209,7 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
             <th scope="col" className="of-balance">
               {t('column.balance')}
             </th>
-            <th scope="col">
+            <th scope="col" className="of-acts">
               <span className="visually-hidden">{t('column.acts')}</span>
             </th>
           </tr>
@@ -218,6 +220,7 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
               key={line.id}
               line={line}
               row={row}
+              columns={columns}
               depth={depthOf(byId, line)}
               standing={balances.get(line.id)}
               kinds={kinds}
@@ -227,25 +230,25 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
               wrongAt={wrongAt}
               acts={acts}
               reorder={reorder}
-              onWrite={(text) => setState({ ...state, editing: { text } })}
+              onWrite={(text) => {
+                written.current = text
+              }}
               onTake={(text) => {
-                write(line.id, COLUMNS[state.column]!, text)
+                write(line.id, columns[state.column]!, text)
                 setState({ ...state, editing: null })
                 setTimeout(() => focusAt(row, state.column))
               }}
               onPress={(column, extend) => {
                 if (state.editing !== null && !(row === state.row && column === state.column)) {
                   const before = lines[state.row]
-                  if (before !== undefined) write(before.id, COLUMNS[state.column]!, state.editing.text)
+                  if (before !== undefined) write(before.id, columns[state.column]!, written.current)
                 }
                 setState(gridAt(state, size, row, column, extend))
               }}
               onOpen={(column) => {
                 if (readOnly) return
-                setState({
-                  ...gridAt(state, size, row, column),
-                  editing: { text: textAt(row, COLUMNS[column]!) },
-                })
+                written.current = textAt(row, columns[column]!)
+                setState({ ...gridAt(state, size, row, column), editing: { text: written.current } })
               }}
             />
           ))}

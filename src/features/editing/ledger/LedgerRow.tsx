@@ -10,14 +10,16 @@ import { useDraft } from '../draftStore'
 import { PartBalloon } from '../fields/PartBalloon'
 import type { Reorder } from '../fields/useReorder'
 import { CellInput } from './CellInput'
-import { cellText, COLUMNS, type Column, type KindWords } from './columns'
+import { cellText, type Column, type KindWords } from './columns'
 import type { WrongCell } from './pasteBlock'
+import { useConditionSentence } from '../step/useConditionSentence'
 import { Standing } from './Standing'
 import type { LineActs } from './useLineActs'
 
 export interface LedgerRowProps {
   line: Line
   row: number
+  columns: readonly Column[]
   depth: number
   standing: Reconciled | undefined
   kinds: KindWords
@@ -38,9 +40,10 @@ export interface LedgerRowProps {
 
 /** A line of the list. */
 export function LedgerRow(props: LedgerRowProps) {
-  const { line, row, depth, standing, acts, reorder } = props
+  const { line, row, columns, depth, standing, acts, reorder } = props
   const { t } = useTranslation('editingLedger')
   const { readOnly, numbers } = useDraft()
+  const condition = useConditionSentence()
   const { name } = line.options[0]!.part
   const said = name === '' ? t('untitled') : name
   const off = standing !== undefined && ['more used', 'more listed', 'no quantity'].includes(standing.balance)
@@ -54,11 +57,12 @@ export function LedgerRow(props: LedgerRowProps) {
         )}
         <PartBalloon line={line.id} />
       </th>
-      {COLUMNS.map((column, index) => (
+      {columns.map((column, index) => (
         <Cell key={column} {...props} column={column} index={index} indent={column === 'name' ? depth : 0} />
       ))}
       <td className="of-balance">
         {standing !== undefined && <Standing of={standing} />}
+        {line.when !== undefined && line.when.length > 0 && <small dir="auto">{condition(line.when)}</small>}
         {standing !== undefined && standing.steps.length > 0 && (
           <small>
             {t('inSteps', {

@@ -2,7 +2,7 @@ import { useMemo, useState } from 'react'
 import { useTranslation } from 'react-i18next'
 import { Plus } from 'lucide-react'
 import { insertNode } from '../../../../shared/guide/edit'
-import { reconcile, takeFromSteps } from '../../../../shared/guide/reconcile'
+import { takeFromSteps } from '../../../../shared/guide/reconcile'
 import type { Id } from '../../../../shared/lib/ids/id'
 import { Button } from '../../../components/controls/Button'
 import { EmptyState } from '../../../components/controls/EmptyState'
@@ -11,6 +11,7 @@ import { TextField } from '../../../components/controls/TextField'
 import { useDraft } from '../draftStore'
 import { useOpenDraft } from '../frame/sessionContext'
 import { newLine } from '../step/newLine'
+import { balancesOf, choicesFor } from './balances'
 import { LedgerGrid } from './LedgerGrid'
 import { LineFolds } from './LineFolds'
 import { LineSheet } from './LineSheet'
@@ -29,10 +30,7 @@ export function PartsLedger() {
   const narrow = useNarrow()
   const [view, setView] = useState<View>({ words: '', order: 'listed' })
   const [sheet, setSheet] = useState<Id | null>(null)
-  const balances = useMemo(
-    () => new Map(reconcile(document, choices).lines.map((found) => [found.line, found])),
-    [document, choices],
-  )
+  const balances = useMemo(() => balancesOf(document, choices), [document, choices])
   const shown = useMemo(
     () => shownLines(document, view, balances, numbers.line),
     [document, view, balances, numbers],
@@ -49,7 +47,9 @@ export function PartsLedger() {
     else setTimeout(() => acts.focusName(line.id))
   }
   const takeAll = (): void => {
-    edit((doc) => canTake.reduce((now, { line }) => takeFromSteps(now, line, choices), doc))
+    edit((doc) =>
+      canTake.reduce((now, { line }) => takeFromSteps(now, line, choicesFor(now, line, choices)), doc),
+    )
     sayDone(t('take.allDone', { count: canTake.length }))
   }
   if (document.lines.length === 0 && readOnly) return <p className="note">{t('empty.readOnly')}</p>

@@ -25,6 +25,7 @@ export interface Pasted {
 /**
  * Writes a block of cells from a cell on, to the right and downwards over the lines as they are shown, and makes new lines at the end of the
  * list for rows that are left. A single cell fills a whole range. New lines have no quantity where the block has none: never a silent 1.
+ * @param columns those that are shown.
  * @param rows the ids of the lines as shown, from the first row on.
  */
 export function pasteBlock(
@@ -34,6 +35,7 @@ export function pasteBlock(
   block: readonly (readonly string[])[],
   kinds: KindWords,
   newId: NewId,
+  columns: readonly Column[] = COLUMNS,
 ): Pasted {
   const pasted: Pasted = { document: doc, wrong: [], tried: [], added: 0, beyond: 0 }
   block.forEach((cells, index) => {
@@ -46,7 +48,7 @@ export function pasteBlock(
       id = line.id
     }
     // From left to right, so that a quantity stands before its unit and a kind before its model.
-    cells.forEach((text, offset) => write(pasted, id, COLUMNS[at.column + offset], text, kinds))
+    cells.forEach((text, offset) => write(pasted, id, columns[at.column + offset], text, kinds))
   })
   return pasted
 }

@@ -6,6 +6,7 @@ import type { Id } from '../../../../shared/lib/ids/id'
 import { useDraft } from '../draftStore'
 import { useOpenDraft } from '../frame/sessionContext'
 import { newLine } from '../step/newLine'
+import { choicesFor } from './balances'
 import { moveLine, nestDeeper, nestOut } from './lineOrder'
 
 export interface LineActs {
@@ -70,7 +71,7 @@ export function useLineActs(canMove: boolean, openSheet: (id: Id) => void): Line
       if (next !== undefined) setTimeout(() => focusName(next.id))
     },
     take: (id) => {
-      edit((doc) => takeFromSteps(doc, id, choices))
+      edit((doc) => takeFromSteps(doc, id, choicesFor(doc, id, choices)))
       sayDone(t('take.done', { name: nameOf(id) }))
     },
   }

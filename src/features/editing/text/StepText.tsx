@@ -5,6 +5,7 @@ import { Dropcursor, Gapcursor, Placeholder } from '@tiptap/extensions'
 import { EditorContent, useEditor } from '@tiptap/react'
 import { insertNode, setNode } from '../../../../shared/guide/edit'
 import type { Measure, RichText, Step } from '../../../../shared/guide/schema'
+import { inlinesOf } from '../../../../shared/guide/plainText'
 import { stepsOf } from '../../../../shared/guide/stepsOf'
 import type { Id } from '../../../../shared/lib/ids/id'
 import { directionOf } from '../../../../shared/lib/language/direction'
@@ -15,7 +16,7 @@ import { fromEditor, isBlank, toEditor } from './convert'
 import { ItemGrip } from './ItemGrip'
 import { lastingIds } from './lastingIds'
 import { LinkForm } from './LinkForm'
-import { listKeys } from './listKeys'
+import { listKeys, OWN_DEED } from './listKeys'
 import { pasting } from './pasting'
 import type { Pick } from './pickable'
 import { picking, PickStore } from './picking'
@@ -51,7 +52,6 @@ function TextEditor({ step }: { step: Step }) {
   const [store] = useState(() => new PickStore())
   const [form, setForm] = useState<Form | null>(null)
   const [offer, setOffer] = useState<{ line: Id; count: string } | null>(null)
-  const together = `text:${step.id}`
 
   const editor = useEditor({
     immediatelyRender: false,
@@ -63,7 +63,7 @@ function TextEditor({ step }: { step: Step }) {
       quantityRule,
       pasting,
       conditionsInText(host),
-      picking(host, store, (pick, range) => choose(pick, range)),
+      picking(host, store),
       Placeholder.configure({ placeholder: () => t('placeholder'), showOnlyCurrent: false }),
       Dropcursor.configure({ color: 'var(--oxide)', width: 2 }),
       Gapcursor,
@@ -83,14 +83,14 @@ function TextEditor({ step }: { step: Step }) {
       handleKeyDown: (view, event) => {
         if (event.key === 'k' && (event.ctrlKey || event.metaKey) && !event.altKey && !event.shiftKey) {
           event.preventDefault()
-          openLink(view.dom)
+          host.acts?.openLink(anchorOf(view))
           return true
         }
         const { selection } = view.state
         const chosen = view.state.doc.nodeAt(selection.from)
         if (event.key !== 'Enter' || selection.empty || chosen?.type.name !== 'quantity') return false
         const place = view.nodeDOM(selection.from)
-        if (place instanceof Element) changeQuantity(selection.from, place)
+        if (place instanceof Element) host.acts?.changeQuantity(selection.from, place)
         return true
       },
     },
@@ -100,19 +100,24 @@ function TextEditor({ step }: { step: Step }) {
       // An empty place to write in is no text yet.
       if (isBlank(body) && host.body.content.length === 0) return
       host.wrote(body)
-      host.now.edit((doc) => setNode(doc, 'step', step.id, { body }), together)
+      const deed = transaction.getMeta(OWN_DEED) as string | undefined
+      host.now.edit(
+        (doc) => setNode(doc, 'step', step.id, { body }),
+        deed === undefined ? `text:${step.id}` : deed === 'move' ? undefined : deed,
+      )
     },
   })
 
-  useEffect(() => host.take(draft), [host, draft])
   useEffect(() => editor?.setEditable(!readOnly, false), [editor, readOnly])
   useTakeOver(editor, host, step.body)
 
   const choose = (pick: Pick, range: { from: number; to: number }): void => {
     if (editor === null) return
+    const deed = `pick:${newId()}`
     const put = (type: string, attrs: Record<string, unknown>): void => {
       editor
         .chain()
+        .setMeta(OWN_DEED, deed)
         .focus()
         .insertContentAt(range, [
           { type, attrs },
@@ -130,7 +135,7 @@ function TextEditor({ step }: { step: Step }) {
       return
     }
     const line = newLine(newId, pick.name)
-    host.now.edit((doc) => insertNode(doc, 'line', line, null), together)
+    host.now.edit((doc) => insertNode(doc, 'line', line, null), deed)
     put('balloon', { line: line.id })
     setOffer({ line: line.id, count })
   }
@@ -192,6 +197,8 @@ function TextEditor({ step }: { step: Step }) {
     } else chain.extendMarkRange('link').setMark('link', { href }).run()
   }
 
+  useEffect(() => host.take(draft, { choose, openLink, changeQuantity }))
+
   if (editor === null) return null
   return (
     <TextActsContext value={{ changeQuantity, when: step.when }}>
@@ -209,7 +216,7 @@ function TextEditor({ step }: { step: Step }) {
           {!readOnly && <ItemGrip editor={editor} />}
           <PickList store={store} editor={editor} />
         </div>
-        {offer !== null && !usesLine(host, offer.line) && (
+        {offer !== null && isOpenOffer(step, offer.line) && (
           <UseOffer {...offer} step={step} onDone={() => setOffer(null)} />
         )}
         {form?.is === 'number' && (
@@ -258,6 +265,17 @@ const usesLine = (host: TextHost, line: Id): boolean =>
   stepsOf(host.now.document)
     .find(({ id }) => id === host.stepId)
     ?.uses.some((use) => use.line === line) ?? false
+
+/** The block that the cursor stands in, to put a box beside it. */
+function anchorOf(view: Editor['view']): Element {
+  const { node } = view.domAtPos(view.state.selection.from)
+  return node instanceof Element ? node : node.parentElement!
+}
+
+/** The text still names the part, and the step does not take it in hand. */
+const isOpenOffer = (step: Step, line: Id): boolean =>
+  !step.uses.some((use) => use.line === line) &&
+  inlinesOf(step.body).some((inline) => inline.type === 'balloon' && inline.attrs.line === line)
 
 /** What comes from outside (undo, another author) is shown; what was written here is there already. */
 function useTakeOver(editor: Editor | null, host: TextHost, body: RichText): void {

@@ -47,6 +47,9 @@ function atItemStart({ state }: Editor): boolean {
   return $from.node(-1).type.name === 'listItem' && $from.index(-1) === 0
 }
 
+/** Marks a change that undo takes back by itself, and not together with the typing before it. Changes with the same value are one. */
+export const OWN_DEED = 'own deed'
+
 /** Moves the innermost list item that holds the cursor past its neighbour; the cursor goes along. */
 export function moveItem({ state, view }: Editor, by: -1 | 1): boolean {
   const { $from } = state.selection
@@ -66,6 +69,6 @@ export function moveItem({ state, view }: Editor, by: -1 | 1): boolean {
   const cursor = Math.min(to + within, tr.doc.content.size)
   const place = tr.doc.resolve(cursor)
   tr.setSelection(place.parent.isTextblock ? TextSelection.create(tr.doc, cursor) : Selection.near(place))
-  view.dispatch(tr.scrollIntoView())
+  view.dispatch(tr.setMeta(OWN_DEED, 'move').scrollIntoView())
   return true
 }

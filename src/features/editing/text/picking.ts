@@ -45,11 +45,7 @@ export class PickStore {
 }
 
 /** "@" opens the list of parts, "#" the list of steps and figures. */
-export const picking = (
-  host: TextHost,
-  store: PickStore,
-  chosen: (pick: Pick, range: { from: number; to: number }) => void,
-) =>
+export const picking = (host: TextHost, store: PickStore) =>
   Extension.create({
     name: 'picking',
     addProseMirrorPlugins() {
@@ -62,7 +58,7 @@ export const picking = (
           allowSpaces: char === '@',
           allowedPrefixes: [' ', '\u00a0', '(', '“', '«', '،'],
           items: ({ query }) => items(query),
-          command: ({ range, props }) => chosen(props, range),
+          command: ({ range, props }) => host.acts?.choose(props, range),
           render: () => {
             const show = (props: SuggestionProps<Pick, Pick>): void => {
               const before = store.look()

@@ -3,10 +3,19 @@ import type { Id } from '../../../../shared/lib/ids/id'
 import { wordsOf } from '../../../../shared/guide/plainText'
 import { stepsOf } from '../../../../shared/guide/stepsOf'
 import type { DraftAtHand } from '../draftStore'
+import type { Pick } from './pickable'
+
+/** What the editor asks of the component round it, as it is after its latest rendering. */
+export interface HostActs {
+  choose: (pick: Pick, range: { from: number; to: number }) => void
+  openLink: (anchor: Element) => void
+  changeQuantity: (pos: number, anchor: Element) => void
+}
 
 /** What the editor, which lives longer than a rendering, asks of the draft as it is now. */
 export class TextHost {
   private own: RichText
+  private latestActs: HostActs | null = null
 
   constructor(
     private draft: DraftAtHand,
@@ -38,8 +47,14 @@ export class TextHost {
     return this.sayOnlyWith(names.join(', '))
   }
 
-  take(draft: DraftAtHand): void {
+  take(draft: DraftAtHand, acts: HostActs): void {
     this.draft = draft
+    this.latestActs = acts
+  }
+
+  /** Null before the first rendering is done. */
+  get acts(): HostActs | null {
+    return this.latestActs
   }
 
   get now(): DraftAtHand {
