@@ -8,6 +8,8 @@ export interface Portion {
   title: string
   pieces: Piece[]
   include: boolean
+  /** Whether the page itself sets it out as a step, by a number, bold words or a picture; not only by a heading. */
+  isSetOut?: boolean
 }
 
 /** What a page divides into. `parts` and `tools` are what stands under such headings. */
@@ -159,9 +161,10 @@ function addPart(division: Division, part: Part, isAll: boolean): void {
   if (!aside && numberedItems(part) >= 2) return addTo(sectionFor(division, part, true), byItems(part))
   if (!aside && part.pieces.filter(isRunIn).length >= 2)
     return addTo(sectionFor(division, part, true), byRunIns(part))
-  const isBuild = /build|assembl|construct|procedure|montage|zusammenbau|aufbau|组装|montaje|montagem/i.test(
-    part.title,
-  )
+  const isBuild =
+    /^\W*(build(ing)?|assembly|construction|montage|zusammenbau|aufbau|组装|montaje|montagem)( procedure| instructions| steps| process)?\W*$/i.test(
+      part.title,
+    )
   if (!aside && (division.by === 'pictures' || isBuild) && pairs(part.pieces).length >= 2) {
     return addTo(sectionFor(division, part, true), pairs(part.pieces))
   }
@@ -173,7 +176,7 @@ function addPart(division: Division, part: Part, isAll: boolean): void {
 }
 
 const addTo = (portions: Portion[], more: readonly Portion[]): void => {
-  portions.push(...more)
+  portions.push(...more.map((portion) => ({ ...portion, isSetOut: portion.include })))
 }
 
 /** Each item is a step; what stands before the first goes with it, what stands after one with that one. */
@@ -196,9 +199,12 @@ function byItems(part: Part): Portion[] {
 function titled(pieces: readonly Piece[]): { title: string; pieces: Piece[] } {
   const first = pieces[0]
   if (first?.kind !== 'paragraph')
-    return { title: firstSentence(first === undefined ? '' : plainPiece(first)), pieces: [...pieces] }
+    return {
+      title: bareTitle(firstSentence(first === undefined ? '' : plainPiece(first))),
+      pieces: [...pieces],
+    }
   const bold = boldStart(first.words)
-  if (bold === null) return { title: firstSentence(plainWords(first.words)), pieces: [...pieces] }
+  if (bold === null) return { title: bareTitle(firstSentence(plainWords(first.words))), pieces: [...pieces] }
   const rest = tidy(withoutStart(first.words, bold))
   const kept: Piece[] = rest.length === 0 && first.pictures.length === 0 ? [] : [{ ...first, words: rest }]
   return { title: bareTitle(bold.replace(/[.:]\s*$/, '')), pieces: [...kept, ...pieces.slice(1)] }

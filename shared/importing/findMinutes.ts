@@ -17,12 +17,12 @@ export function findMinutes(line: string): number | undefined {
     (match) => Number(match[1]) * 60 + Number(match[2]),
   )
   if (clock.length > 0) return bounded(Math.max(...clock))
-  let unit: number | undefined
-  const values: number[] = []
-  for (const match of [...told.matchAll(/(\d+(?:[.,]\d+)?)\s*([\p{L}]+)?/gu)].reverse()) {
-    unit = UNITS.find(([pattern]) => pattern.test(match[2] ?? ''))?.[1] ?? unit
-    if (unit !== undefined) values.push(Number(match[1]!.replace(',', '.')) * unit)
-  }
+  const values = [
+    ...told.matchAll(/(\d+(?:[.,]\d+)?)(?:\s*(?:[-–—]|to|bis|a|à)\s*(\d+(?:[.,]\d+)?))?\s*(\p{L}+)/gu),
+  ].flatMap((match) => {
+    const unit = UNITS.find(([pattern]) => pattern.test(match[3]!))?.[1]
+    return unit === undefined ? [] : [Number((match[2] ?? match[1]!).replace(',', '.')) * unit]
+  })
   return values.length === 0 ? undefined : bounded(Math.max(...values))
 }
 

@@ -212,6 +212,8 @@ class Reading {
     const isParts =
       isPartsTitle(division.title) || /(^|[/_-])(bom|parts?(list)?|materials?)\.[a-z]+$/i.test(page.path)
     const tells = !isParts && !isOld(page.path) && (tellsSteps(page, division, pages) || !isGuide)
+    // The README of a design with pages of its own for building: only what it sets out as steps is one.
+    const strict = pages > 1 && /(^|\/)readme\.[^/]*$/i.test(page.path) && division.by !== 'numbered headings'
     this.addTools(division.tools)
     this.findChoices(page)
     const sections = division.sections.map(({ title, portions }) => ({
@@ -224,7 +226,7 @@ class Reading {
           pieces: kept,
           uses,
           lines: isParts ? [] : lines,
-          include: portion.include && tells,
+          include: portion.include && tells && (!strict || portion.isSetOut === true),
         }
       }),
     }))
@@ -237,7 +239,7 @@ class Reading {
       })
       return isWordless(rest) && picturesOf(rest).length === 0
         ? []
-        : [{ title: title || division.title, pieces: rest, include: false, uses: [], lines: [] }]
+        : [{ title: bareTitle(title || division.title), pieces: rest, include: false, uses: [], lines: [] }]
     })
     return {
       page,
