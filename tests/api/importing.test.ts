@@ -185,7 +185,7 @@ test('a damaged ZIP fails with a sentence; so does a form without a path for eac
   expect((await client.upload('/api/imports', page(), { paths: '["../a.md"]' })).status).toBe(400)
 })
 
-/** Steps, lines and models counted in the sources by hand: headings and rows of the files. */
+/** At least so many steps, lines and models must come out: floors against loss, not exact counts. */
 const DESIGNS: Record<string, { steps: number; lines: number; models: number }> = {
   'omni-base': { steps: 9, lines: 46, models: 8 },
   'cart-robot': { steps: 8, lines: 15, models: 1 },
