@@ -2,6 +2,8 @@ import { fileAddress, type FileEntry } from '../../../shared/api/files'
 import type { Callout, Figure } from '../../../shared/guide/schema'
 import type { Id } from '../../../shared/lib/ids/id'
 import { Balloon } from './Balloon'
+import { CalloutLines } from './CalloutLines'
+import { placedOf, placeStyle, wordsPlace, type Placed } from './calloutShape'
 import { useGuide } from './guideView'
 import { QuantityView } from './QuantityView'
 import { useOwnLanguage, useWords } from './useWords'
@@ -14,11 +16,12 @@ export function FigureView({ id, eager = false }: { id: Id; eager?: boolean }) {
   const figure = doc.figures.find((candidate) => candidate.id === id)
   const file = figure?.asset === undefined || figure.asset === null ? undefined : files.get(figure.asset)
   if (figure === undefined) return null
+  const size = sizeOf(file)
   return (
     <figure className="figure" id={figure.id}>
       <div className="plate" dir="ltr">
-        {file === undefined ? null : <Picture file={file} figure={figure} eager={eager} />}
-        <CalloutMarks callouts={figure.callouts} />
+        {file === undefined ? null : <Picture file={file} figure={figure} eager={eager} size={size} />}
+        <CalloutMarks callouts={figure.callouts} ratio={size.width / size.height} />
       </div>
       <figcaption>
         <b>{t('figure', { number: numbers.figure[figure.id] ?? '' })}</b>{' '}
@@ -28,10 +31,27 @@ export function FigureView({ id, eager = false }: { id: Id; eager?: boolean }) {
   )
 }
 
-function Picture({ file, figure, eager }: { file: FileEntry; figure: Figure; eager: boolean }) {
+interface Size {
+  width: number
+  height: number
+}
+
+/** A picture's size as it is seen; a usual one where it is not known. */
+function sizeOf(file: FileEntry | undefined): Size {
+  const still = file?.renditions.find(({ name }) => name === 'still')
+  return file?.picture ?? { width: still?.width ?? 1200, height: still?.height ?? 900 }
+}
+
+interface PictureProps {
+  file: FileEntry
+  figure: Figure
+  eager: boolean
+  size: Size
+}
+
+function Picture({ file, figure, eager, size }: PictureProps) {
   const still = file.renditions.find(({ name }) => name === 'still')
   const loading = eager ? undefined : 'lazy'
-  const size = file.picture ?? { width: still?.width ?? 1200, height: still?.height ?? 900 }
   const shape = { width: size.width, height: size.height, alt: figure.alt, loading } as const
   if (still !== undefined)
     return <img className="drawing" src={fileAddress(file.sha256, still.name)} {...shape} />
@@ -52,30 +72,13 @@ function Picture({ file, figure, eager }: { file: FileEntry; figure: Figure; eag
   )
 }
 
-const percent = (place: number): string => `${place / 100}%`
-
 /** The marks over a picture that have been placed. Their size stays, however small the picture gets. */
-export function CalloutMarks({ callouts }: { callouts: readonly Callout[] }) {
-  const placed = callouts.flatMap((callout) => (callout.at === null ? [] : [{ ...callout, at: callout.at }]))
+function CalloutMarks({ callouts, ratio }: { callouts: readonly Callout[]; ratio: number }) {
+  const placed = placedOf(callouts)
   if (placed.length === 0) return null
   return (
     <>
-      <svg className="leaders" viewBox="0 0 10000 10000" preserveAspectRatio="none" aria-hidden="true">
-        {placed.map(({ id, at, tip, shape }) =>
-          tip === null ? null : shape === 'area' ? (
-            <rect
-              key={id}
-              className="l0"
-              x={Math.min(at.x, tip.x)}
-              y={Math.min(at.y, tip.y)}
-              width={Math.abs(at.x - tip.x)}
-              height={Math.abs(at.y - tip.y)}
-            />
-          ) : (
-            <path key={id} className="l0" d={`M${at.x} ${at.y}L${tip.x} ${tip.y}`} />
-          ),
-        )}
-      </svg>
+      <CalloutLines callouts={placed} ratio={ratio} />
       {placed.map((callout) => (
         <CalloutMark key={callout.id} callout={callout} />
       ))}
@@ -83,27 +86,21 @@ export function CalloutMarks({ callouts }: { callouts: readonly Callout[] }) {
   )
 }
 
-function CalloutMark({ callout }: { callout: Callout & { at: { x: number; y: number } } }) {
+function CalloutMark({ callout }: { callout: Placed }) {
   const own = useOwnLanguage()
-  const { at, tip, shape } = callout
   return (
-    <>
-      {tip !== null && shape !== 'area' && (
-        <span className="tip" style={{ left: percent(tip.x), top: percent(tip.y) }} />
+    <span className="mark" style={placeStyle(wordsPlace(callout))}>
+      {callout.shape === 'balloon' && <Balloon line={callout.line} />}
+      {callout.shape === 'dimension' && (
+        <span className="dt">
+          <QuantityView {...callout.value} />
+        </span>
       )}
-      <span className="mark" style={{ left: percent(at.x), top: percent(at.y) }}>
-        {shape === 'balloon' && <Balloon line={callout.line} />}
-        {shape === 'dimension' && (
-          <span className="dt">
-            <QuantityView {...callout.value} />
-          </span>
-        )}
-        {callout.text !== undefined && callout.text !== '' && (
-          <span className="dt" {...own}>
-            {callout.text}
-          </span>
-        )}
-      </span>
-    </>
+      {callout.text !== undefined && callout.text !== '' && (
+        <span className="dt" {...own}>
+          {callout.text}
+        </span>
+      )}
+    </span>
   )
 }

@@ -8,6 +8,8 @@ import { useDraft } from '../draftStore'
 export function usePicture(figure: Figure): {
   file: FileEntry | undefined
   address: string | null
+  /** A drawing of lines, not a photo. */
+  drawn: boolean
   ratio: number
 } {
   const { files } = useDraft()
@@ -21,6 +23,7 @@ export function usePicture(figure: Figure): {
   return {
     file,
     ratio,
+    drawn: shown?.name === 'still',
     address: file === undefined || shown === undefined ? null : fileAddress(file.sha256, shown.name),
   }
 }
@@ -28,10 +31,17 @@ export function usePicture(figure: Figure): {
 /** The picture, or how far it is on its way, or why it is not there. */
 export function FigurePicture({ figure }: { figure: Figure }) {
   const { t } = useTranslation('editingFigures')
-  const { file, address, ratio } = usePicture(figure)
+  const { file, address, ratio, drawn } = usePicture(figure)
   if (address !== null) {
     return (
-      <img src={address} alt={figure.alt} width={1000} height={Math.round(1000 / ratio)} draggable={false} />
+      <img
+        className={drawn ? 'drawing' : undefined}
+        src={address}
+        alt={figure.alt}
+        width={1000}
+        height={Math.round(1000 / ratio)}
+        draggable={false}
+      />
     )
   }
   return (
