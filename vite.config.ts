@@ -54,6 +54,6 @@ export default defineConfig({
       'tests/{api,reference,faults}/**/*.test.ts',
       'fixtures/**/*.test.ts',
     ],
-    testTimeout: 30_000,
+    testTimeout: 60_000,
   },
 })

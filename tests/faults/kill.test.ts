@@ -93,7 +93,7 @@ test('killed while it works on pictures: the jobs go on after the start', async 
   let states: string[] = []
   for (
     let tries = 0;
-    tries < 200 && !(states.length === 4 && states.every((state) => state === 'ready'));
+    tries < 1200 && !(states.length === 4 && states.every((state) => state === 'ready'));
     tries += 1
   ) {
     const answer = await server.client.get(`/api/files?sha256=${hashes}`)
@@ -102,7 +102,7 @@ test('killed while it works on pictures: the jobs go on after the start', async 
   }
   expect(states).toEqual(['ready', 'ready', 'ready', 'ready'])
   expectWhole(server)
-})
+}, 120_000)
 
 test('killed in the middle of saves, at four moments: each time the old state or the new one, and none that was answered is lost', async () => {
   server = await ServerProcess.start()
