@@ -4,7 +4,8 @@ import { LineKind, type Line } from '../../../../shared/guide/schema'
 import { unitCodes } from '../../../../shared/lib/units/units'
 import { unitFor } from '../../../../shared/lib/units/unitFor'
 import { useDraft } from '../draftStore'
-import { unitWord, type Column, type KindWords } from './columns'
+import { useUnitWord } from '../fields/useUnitWord'
+import type { Column, KindWords } from './columns'
 
 export interface CellInputProps {
   column: Column
@@ -21,6 +22,7 @@ export interface CellInputProps {
 export function CellInput({ column, line, kinds, text: begun, onWrite, onTake, errorId }: CellInputProps) {
   const { t } = useTranslation('editingLedger')
   const { document } = useDraft()
+  const word = useUnitWord()
   const [text, setText] = useState(begun)
   const write = (now: string): void => {
     setText(now)
@@ -78,7 +80,7 @@ export function CellInput({ column, line, kinds, text: begun, onWrite, onTake, e
 
   function optionsOf(list: 'kind' | 'unit' | 'model'): { value: string; label: string }[] {
     if (list === 'kind') return LineKind.options.map((kind) => ({ value: kind, label: kinds[kind] }))
-    if (list === 'unit') return unitCodes.map((code) => ({ value: code, label: unitWord(code) }))
+    if (list === 'unit') return unitCodes.map((code) => ({ value: code, label: word(code) }))
     return document.models.map(({ id, name }) => ({ value: id, label: name }))
   }
 }

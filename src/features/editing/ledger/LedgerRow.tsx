@@ -8,6 +8,7 @@ import { Button } from '../../../components/controls/Button'
 import { Menu } from '../../../components/controls/Menu'
 import { useDraft } from '../draftStore'
 import { PartBalloon } from '../fields/PartBalloon'
+import { useUnitWord } from '../fields/useUnitWord'
 import type { Reorder } from '../fields/useReorder'
 import { CellInput } from './CellInput'
 import { cellText, type Column, type KindWords } from './columns'
@@ -133,6 +134,7 @@ interface CellProps extends LedgerRowProps {
 function Cell({ line, column, index, indent, kinds, cursor, chosen, editing, wrongAt, ...on }: CellProps) {
   const { t } = useTranslation('editingLedger')
   const { document } = useDraft()
+  const unitWord = useUnitWord()
   const isCursor = cursor === index
   const wrong = wrongAt(line.id, column)
   const errorId = `wrong-${line.id}-${column}`
@@ -165,7 +167,8 @@ function Cell({ line, column, index, indent, kinds, cursor, chosen, editing, wro
     )
   }
   const press = (event: MouseEvent): void => on.onPress(index, event.shiftKey)
-  const shown = wrong?.text ?? text
+  const shown =
+    wrong?.text ?? (column === 'unit' && line.quantity !== null ? unitWord(line.quantity.unit) : text)
   const nothing = emptySays(line, column)
   return (
     <td

@@ -68,7 +68,7 @@ export function cellText(doc: GuideDocument, line: Line, column: Column, kinds: 
 }
 
 /** A unit in a cell. Pieces are said, because an empty cell would be no unit. */
-export const unitWord = (unit: keyof typeof UNITS): string => UNITS[unit].symbol || unit
+const unitWord = (unit: keyof typeof UNITS): string => UNITS[unit].symbol || unit
 
 /** Writes text into a cell. @returns the reason where it does not fit, and then nothing has changed. */
 export function setCell(
