@@ -2,7 +2,17 @@ import type { Id } from '../../../shared/lib/ids/id'
 import { useGuide } from './guideView'
 
 /** The circled number of a line; the second ring of a substitute. A line that is not there has no balloon. */
-export function Balloon({ line, plain = false }: { line: Id; plain?: boolean }) {
+export function Balloon({
+  line,
+  plain = false,
+  named = true,
+}: {
+  line: Id
+  /** Not a link: where the line itself stands. */
+  plain?: boolean
+  /** False where the part's name stands beside it, which is not read out twice. */
+  named?: boolean
+}) {
   const { doc, whole, numbers, base } = useGuide()
   const found = doc.lines.find((candidate) => candidate.id === line)
   const number = numbers.line[line]
@@ -12,8 +22,8 @@ export function Balloon({ line, plain = false }: { line: Id; plain?: boolean }) 
   const shape = option.id === designers ? 'balloon' : 'balloon substitute'
   if (plain) return <span className={shape}>{number}</span>
   return (
-    <a className={shape} href={`${base}/parts#${line}`} title={option.part.name}>
-      <span className="visually-hidden">{option.part.name} </span>
+    <a className={shape} href={`${base}/parts#${line}`} title={named ? option.part.name : undefined}>
+      {named && <span className="visually-hidden">{option.part.name} </span>}
       {number}
     </a>
   )

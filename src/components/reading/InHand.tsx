@@ -23,7 +23,7 @@ export function InHand({ step }: { step: Step }) {
               if (line === undefined) return null
               return (
                 <li key={use.id}>
-                  <Balloon line={use.line} />
+                  <Balloon line={use.line} named={false} />
                   <span>
                     <span {...own}>{line.options[0]!.part.name}</span>
                     <small>{t(`guide:lineKind.${line.kind}`)}</small>
@@ -42,9 +42,11 @@ export function InHand({ step }: { step: Step }) {
       {tools.length > 0 && (
         <>
           <h3 className="label">{t('tools')}</h3>
-          <ul className="ticks" {...own}>
+          <ul className="ticks">
             {tools.map((tool) => (
-              <li key={tool.id}>{tool.name}</li>
+              <li key={tool.id}>
+                <span {...own}>{tool.name}</span>
+              </li>
             ))}
           </ul>
         </>

@@ -92,7 +92,7 @@ function LineRow({ line }: { line: Line }) {
           <small>{t('spare', { percent: number(line.sparePercent) })}</small>
         )}
       </td>
-      <td>
+      <td data-l={t('usedIn')}>
         {steps.map((step, index) => (
           <span key={step.id}>
             {index > 0 && ', '}
@@ -104,6 +104,7 @@ function LineRow({ line }: { line: Line }) {
         ))}
       </td>
       <td>
+        {sources.length > 0 && <small className="on-phone">{t('where')}</small>}
         {sources.map((source) => (
           <small key={source.id} {...own}>
             {source.address === '' ? (

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react'
 import type { Id } from '../../../shared/lib/ids/id'
 import { CautionView } from './CautionView'
 import { CheckView } from './CheckView'
@@ -11,7 +12,18 @@ import { useOwnLanguage, useWords } from './useWords'
  * One step as a maker reads it. The order in the source is the order on a phone: number and title, parts and tools, cautions, then the
  * instruction that needs them. A title is a heading of `level`.
  */
-export function StepView({ id, level = 2, eager = false }: { id: Id; level?: 1 | 2; eager?: boolean }) {
+export function StepView({
+  id,
+  level = 2,
+  eager = false,
+  children,
+}: {
+  id: Id
+  level?: 1 | 2
+  eager?: boolean
+  /** What else stands in the margin, on a desk. */
+  children?: ReactNode
+}) {
   const { t } = useWords()
   const own = useOwnLanguage()
   const { doc, numbers } = useGuide()
@@ -37,6 +49,7 @@ export function StepView({ id, level = 2, eager = false }: { id: Id; level?: 1 |
         <p>
           <Effort minutes={step.minutes} people={step.people} />
         </p>
+        {children}
       </div>
       <div className="text step-title">
         <Title className="t4" {...own}>
@@ -75,7 +88,7 @@ export function Effort({ minutes, people }: { minutes: number | null; people: nu
       {minutes !== null && (
         <>
           <Duration minutes={minutes} />
-          {', '}
+          {t('comma')}
         </>
       )}
       {t('people', { count: people })}

@@ -1,6 +1,7 @@
 import { useContext } from 'react'
 import type { i18n } from 'i18next'
 import { I18nContext } from 'react-i18next'
+import { directionOf } from '../../../shared/lib/language/direction'
 import { localeOf } from '../../lib/localeOf'
 import { ownLanguage, useGuide } from './guideView'
 
@@ -11,6 +12,8 @@ const wordsIn = (instance: i18n) => {
     language,
     number: (value: string | number) => formatNumber(value, language),
     date: (iso: string) => formatDate(iso, language),
+    /** A label within a sentence that runs from right to left keeps its own direction (U+2068, U+2069). */
+    isolated: (label: string) => (directionOf(language) === 'rtl' ? `\u2068${label}\u2069` : label),
   }
 }
 type Words = ReturnType<typeof wordsIn>

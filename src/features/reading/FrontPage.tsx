@@ -172,9 +172,11 @@ function Needs({ guide }: { guide: GuideData }) {
         <div>
           <h3 className="label">{t('skills')}</h3>
           {doc.skills.length === 0 && <p className="note">{t('noSkills')}</p>}
-          <ul className="pairs" {...own}>
+          <ul className="pairs">
             {doc.skills.map((skill) => (
-              <li key={skill.id}>{skill.name}</li>
+              <li key={skill.id} {...own}>
+                {skill.name}
+              </li>
             ))}
           </ul>
         </div>
@@ -234,7 +236,7 @@ function Contents({ guide }: { guide: GuideData }) {
 }
 
 function History({ guide }: { guide: GuideData }) {
-  const { t } = useWords()
+  const { t, isolated } = useWords()
   const own = useOwnLanguage()
   const { doc } = useGuide()
   return (
@@ -272,7 +274,7 @@ function History({ guide }: { guide: GuideData }) {
           <h3 className="label">{t('toKeep')}</h3>
           <p className="note">
             <a href={`/guides/${guide.slug}/revisions/${guide.revision.label}`}>
-              {t('addressForEver', { label: guide.revision.label })}
+              {t('addressForEver', { label: isolated(guide.revision.label) })}
             </a>
           </p>
           <p className="note">

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react'
 import type { GuideData } from '../../../shared/api/pages'
-import { GuideContext, viewOf } from '../../components/reading/guideView'
+import { GuideContext, useGuide, viewOf } from '../../components/reading/guideView'
 import { TitleBlock } from '../../components/reading/TitleBlock'
 import { useOwnLanguage, useWords } from '../../components/reading/useWords'
 
@@ -19,7 +19,8 @@ export function GuideFrame({
 }: {
   guide: GuideData
   place: GuidePlace
-  step?: string
+  /** The number of the step on a page of its own. */
+  step?: number
   children: ReactNode
 }) {
   const base = baseOf(guide)
@@ -38,7 +39,7 @@ export function GuideFrame({
 }
 
 function GuideHead({ guide, place }: { guide: GuideData; place: GuidePlace }) {
-  const { t, date } = useWords()
+  const { t, date, isolated } = useWords()
   const own = useOwnLanguage()
   const base = baseOf(guide)
   const latest = guide.revisions[0]?.id === guide.revision.id
@@ -49,7 +50,11 @@ function GuideHead({ guide, place }: { guide: GuideData; place: GuidePlace }) {
     ...(guide.document.models.length > 0 ? ([['models', `${base}/models`]] as [GuidePlace, string][]) : []),
     ['revisions', `${base}/revisions`],
   ]
-  const revision = `${guide.byline} · ${t('revision', { label: guide.revision.label })}, ${latest ? `${t('current')}, ` : ''}${date(guide.revision.publishedAt)}`
+  const revision = [
+    `${guide.byline} · ${t('revision', { label: isolated(guide.revision.label) })}`,
+    ...(latest ? [t('current')] : []),
+    date(guide.revision.publishedAt),
+  ].join(t('comma'))
   return (
     <>
       <div className="guide-head">
@@ -73,21 +78,22 @@ function GuideHead({ guide, place }: { guide: GuideData; place: GuidePlace }) {
 
 /** An older revision says so, and where the current one is. */
 function Superseded({ guide }: { guide: GuideData }) {
-  const { t } = useWords()
+  const { t, isolated } = useWords()
   const latest = guide.revisions[0]
   if (latest === undefined || latest.id === guide.revision.id) return null
   return (
     <p className="superseded" role="note">
-      {t('superseded', { label: guide.revision.label, latest: latest.label })}{' '}
-      <a href={`/guides/${guide.slug}`}>{t('readLatest', { label: latest.label })}</a>
+      {t('superseded', { label: isolated(guide.revision.label), latest: isolated(latest.label) })}{' '}
+      <a href={`/guides/${guide.slug}`}>{t('readLatest', { label: isolated(latest.label) })}</a>
     </p>
   )
 }
 
-function Foot({ guide, step }: { guide: GuideData; step: string | undefined }) {
-  const { t, date } = useWords()
+function Foot({ guide, step }: { guide: GuideData; step: number | undefined }) {
+  const { t, date, isolated } = useWords()
   const own = useOwnLanguage()
   const { revision, document } = guide
+  const { numbers } = useGuide()
   return (
     <footer className="sheet">
       <TitleBlock
@@ -99,8 +105,13 @@ function Foot({ guide, step }: { guide: GuideData; step: string | undefined }) {
               {document.title}
             </span>,
           ],
-          [t('revisionWord'), `${revision.label}, ${date(revision.publishedAt)}`],
-          step === undefined ? [t('by'), guide.byline] : [t('step'), step],
+          [
+            t('revisionWord'),
+            t('labelDated', { label: isolated(revision.label), date: date(revision.publishedAt) }),
+          ],
+          step === undefined
+            ? [t('by'), guide.byline]
+            : [t('step'), t('ofAll', { number: step, count: numbers.steps })],
           [t('licence'), document.licence],
         ]}
       />

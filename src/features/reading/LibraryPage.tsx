@@ -38,9 +38,9 @@ export function LibraryPage({ library }: { library: LibraryData }) {
               <b>{t('guideCount', { count: library.total })}</b>{' '}
               {question.q !== '' && t('with', { q: question.q })}
             </p>
-            <a className="note to-narrow" href="#narrow">
-              {t('narrow')}
-            </a>
+            <p className="note to-facets">
+              <a href="#narrow">{t('narrow')}</a>
+            </p>
             <p className="note">
               {t('inOrderOf')} {question.sort === 'date' ? t('date') : t('title')};{' '}
               <a href={address(question, { sort: question.sort === 'date' ? 'title' : 'date', page: 1 })}>
@@ -92,7 +92,7 @@ function Narrow({ library }: { library: LibraryData }) {
   const { question } = library
   const names = new Intl.DisplayNames(language, { type: 'language' })
   return (
-    <nav className="narrow" id="narrow" aria-label={t('narrow')}>
+    <nav className="facets" id="narrow" aria-label={t('narrow')}>
       <Facet
         title={t('kindOfMachine')}
         chosen={question.machine}
@@ -140,20 +140,20 @@ function Facet(props: {
   return (
     <section>
       <h2 className="label">{props.title}</h2>
-      <ul className="pairs">
+      <ul>
         {props.choices.map(({ value, count, text }) => (
           <li key={value}>
             <a
               href={props.to(value === props.chosen ? '' : value)}
               aria-current={value === props.chosen ? 'true' : undefined}
             >
-              {text}
+              <bdi>{text}</bdi>
             </a>
             <span className="num">{count}</span>
           </li>
         ))}
         {props.chosen !== '' && (
-          <li>
+          <li className="all">
             <a href={props.to('')}>{t('all')}</a>
           </li>
         )}
@@ -163,7 +163,7 @@ function Facet(props: {
 }
 
 function Entry({ entry }: { entry: LibraryEntry }) {
-  const { t, language, date } = useWords()
+  const { t, language, date, isolated } = useWords()
   const own = ownLanguage(entry.lang, language)
   return (
     <li>
@@ -184,7 +184,8 @@ function Entry({ entry }: { entry: LibraryEntry }) {
           <a href={`/guides/${entry.slug}`}>{entry.title}</a>
         </h2>
         <p className="note">
-          {entry.byline} · {t('revision', { label: entry.label })}, {date(entry.publishedAt)}
+          {entry.byline} ·{' '}
+          {t('revisionDated', { label: isolated(entry.label), date: date(entry.publishedAt) })}
         </p>
         <p {...own}>{entry.summary}</p>
       </div>

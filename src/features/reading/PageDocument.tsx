@@ -81,7 +81,7 @@ function Meta({ request }: { request: PageRequest }) {
   const picture = pictureOf(guide)
   // The latest revision is the one to be found; an older one points at itself, since its text differs.
   const latest = guide.revisions[0]?.id === guide.revision.id
-  const canonical = latest ? here.replace(`/revisions/${guide.revision.label}`, '') : here
+  const canonical = latest ? here.replace(/(\/guides\/[^/]+)\/revisions\/[^/]+/, '$1') : here
   return (
     <>
       <title>{`${title} · Quern`}</title>

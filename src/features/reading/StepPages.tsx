@@ -8,10 +8,12 @@ import { StepView } from '../../components/reading/StepView'
 import { useOwnLanguage, useWords } from '../../components/reading/useWords'
 import { baseOf, GuideFrame } from './GuideFrame'
 
+const NEAR = 3
+
 /** One step on a page of its own. */
 export function StepPage({ guide, step }: { guide: GuideData; step: number }) {
   return (
-    <GuideFrame guide={guide} place="steps" step={String(step)}>
+    <GuideFrame guide={guide} place="steps" step={step}>
       <OneStep guide={guide} number={step} />
     </GuideFrame>
   )
@@ -47,10 +49,37 @@ function OneStep({ guide, number }: { guide: GuideData; number: number }) {
         />
       </div>
       {here.map((step) => (
-        <StepView key={step.id} id={step.id} level={1} eager />
+        <StepView key={step.id} id={step.id} level={1} eager>
+          <Nearby guide={guide} number={number} steps={steps} />
+        </StepView>
       ))}
       <Neighbours guide={guide} number={number} steps={steps} />
     </>
+  )
+}
+
+/** In the margin of a desk: the steps round this one, so that one sees where it stands. */
+function Nearby({ guide, number, steps }: { guide: GuideData; number: number; steps: readonly Step[] }) {
+  const own = useOwnLanguage()
+  const { numbers } = useGuide()
+  const { t } = useWords()
+  const near = steps.filter((step) => Math.abs(numbers.step[step.id]! - number) <= NEAR)
+  return (
+    <nav className="nearby" aria-label={t('nearbySteps')}>
+      <ol>
+        {near.map((step) => {
+          const at = numbers.step[step.id]!
+          return (
+            <li key={step.id}>
+              <a href={`${baseOf(guide)}/steps/${at}`} aria-current={at === number ? 'step' : undefined}>
+                <span {...own}>{step.title}</span>
+                <b className="num">{at}</b>
+              </a>
+            </li>
+          )
+        })}
+      </ol>
+    </nav>
   )
 }
 
