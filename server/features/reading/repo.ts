@@ -25,12 +25,6 @@ export function revisionsOf(db: Db, guideId: string): RevisionRow[] {
     .all()
 }
 
-export function documentJson(db: Db, hash: string): string {
-  const row = db.select({ json: documents.json }).from(documents).where(eq(documents.hash, hash)).get()
-  if (row === undefined) throw new Error(`The document ${hash} is missing.`)
-  return row.json
-}
-
 /** A number that rises with every revision, cheap to ask for: what was rendered before is thrown away when it differs. */
 export function revisionMarker(db: Db): () => number {
   const newest = db
