@@ -1,4 +1,4 @@
-import { useRef, useState, type ClipboardEvent, type FocusEvent, type KeyboardEvent } from 'react'
+import { useId, useRef, useState, type ClipboardEvent, type FocusEvent, type KeyboardEvent } from 'react'
 import { useTranslation } from 'react-i18next'
 import type { Reconciled } from '../../../../shared/guide/reconcile'
 import type { GuideDocument, Line } from '../../../../shared/guide/schema'
@@ -30,12 +30,13 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
   const kinds = useKindWords()
   const wrongAt = useWrongCells()
   const grid = useRef<HTMLTableElement>(null)
+  const keysId = useId()
   const [kept, setState] = useState(startOfGrid)
   const [inGrid, setInGrid] = useState(false)
   // What is being written lives here and not in the state: a key pressed in one cell must not draw all the others again.
   const written = useRef('')
   const hasModels = document.models.length > 0 || document.lines.some(({ kind }) => kind === 'printed')
-  const columns = hasModels ? COLUMNS : COLUMNS.filter((column) => column !== 'model')
+  const columns: readonly Column[] = hasModels ? COLUMNS : COLUMNS.filter((column) => column !== 'model')
   const size = { rows: lines.length, columns: columns.length }
   // Lines may have gone since: the cursor is never outside.
   const state =
@@ -186,6 +187,7 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
         role="grid"
         className="ledger parts-grid"
         aria-label={t('grid')}
+        aria-describedby={readOnly ? undefined : keysId}
         aria-rowcount={lines.length + 1}
         aria-multiselectable
         aria-readonly={readOnly || undefined}
@@ -254,6 +256,11 @@ export function LedgerGrid({ lines, balances, acts }: LedgerGridProps) {
           ))}
         </tbody>
       </table>
+      {!readOnly && (
+        <p className="note grid-keys" id={keysId}>
+          {t('keys')}
+        </p>
+      )}
     </div>
   )
 }
